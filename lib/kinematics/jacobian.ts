@@ -1,0 +1,22 @@
+import { TRANSFORM_SIZE } from '@/lib/math/rigid-transform'
+import { addSliding, addTurning, turnIntoFrame } from '@/lib/math/twist-columns'
+import type { Chain } from './chain'
+import type { Workspace } from './create-workspace'
+import type { TaskFrame } from './task'
+
+/** The geometric Jacobian of the pose in `work` (see forwardKinematics): 6 x n row-major, rows vx vy vz wx wy wz, reference
+ *  point the tool's, in base axes or turned into the tool's. m/s per rad/s or m/s, and rad/s per rad/s. A mimic joint adds its column,
+ *  times its multiplier, to the column of the joint it follows. Returns the array of `work` that holds it. Whitney 1972. */
+export function jacobian(chain: Chain, work: Workspace, frame: TaskFrame = 'base'): Float64Array {
+  const { rotary, joint, multiplier } = work.prepared
+  const n = chain.joints.length
+  work.jacobian.fill(0)
+  for (let i = 0; i < rotary.length; i++) {
+    const at = TRANSFORM_SIZE * i
+    if (rotary[i] === 1) addTurning(work.baseFromMotions, at, work.baseFromTool, multiplier[i]!, work.jacobian, n, joint[i]!)
+    else addSliding(work.baseFromMotions, at, multiplier[i]!, work.jacobian, n, joint[i]!)
+  }
+  if (frame === 'base') return work.jacobian
+  turnIntoFrame(work.baseFromTool, work.jacobian, n, work.tipJacobian)
+  return work.tipJacobian
+}

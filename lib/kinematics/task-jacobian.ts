@@ -1,0 +1,20 @@
+import { decompose } from '@/lib/math/singular-values'
+import type { Chain } from './chain'
+import type { Workspace } from './create-workspace'
+import { jacobian } from './jacobian'
+import { LINEAR_COMPONENTS, type Task } from './task'
+
+/** Fills work.taskJacobian (components x n) at the pose in `work` with the rows that the task asks for, in its frame, linear rows
+ *  divided by `characteristicLength` (m; 1 leaves SI), and work.taskValues with its singular value decomposition. */
+export function taskJacobian(chain: Chain, work: Workspace, task: Task, characteristicLength = 1): Float64Array {
+  const n = chain.joints.length
+  const whole = jacobian(chain, work, task.frame)
+  const { rows } = task
+  for (let k = 0; k < rows.length; k++) {
+    const row = rows[k]!
+    const divisor = row < LINEAR_COMPONENTS ? characteristicLength : 1
+    for (let j = 0; j < n; j++) work.taskJacobian[k * n + j] = whole[row * n + j]! / divisor
+  }
+  decompose(work.taskJacobian, rows.length, n, work.taskValues)
+  return work.taskJacobian
+}

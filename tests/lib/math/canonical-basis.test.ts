@@ -1,0 +1,36 @@
+import { describe, expect, it } from 'vitest'
+import { canonicalBasis } from '@/lib/math/canonical-basis'
+
+describe('canonicalBasis', () => {
+  it('gives the coordinate axes, in order, where nothing is taken', () => {
+    expect(canonicalBasis(new Float64Array(0), 3, 0)).toEqual([
+      [1, 0, 0],
+      [0, 1, 0],
+      [0, 0, 1],
+    ])
+  })
+
+  it('gives nothing where everything is taken', () => {
+    expect(canonicalBasis(Float64Array.of(1, 0, 0, 1), 2, 2)).toEqual([])
+  })
+
+  it('takes the first column of at least 0.499 of the largest, and makes its component positive', () => {
+    // What is left is one direction u: its projector's columns have the norms |u|.
+    const of = (u: readonly [number, number]) => canonicalBasis(Float64Array.of(u[1], -u[0]), 2, 1)[0]!
+    const small = Math.sqrt(1 / (1 + 1 / 0.4985 ** 2))
+    const large = Math.sqrt(1 / (1 + 1 / 0.4995 ** 2))
+    expect(of([-large, Math.sqrt(1 - large * large)])[0]).toBeGreaterThan(0)
+    expect(of([-small, Math.sqrt(1 - small * small)])[0]).toBeLessThan(0)
+    expect(of([-0.6, -0.8])[0]).toBeCloseTo(0.6, 15)
+    expect(of([-0.6, -0.8])[1]).toBeCloseTo(0.8, 15)
+  })
+
+  it('leaves no trace of an earlier pivot in a later vector', () => {
+    const third = 1 / Math.sqrt(3)
+    const [first, second] = canonicalBasis(Float64Array.of(third, third, third), 3, 1) as [number[], number[]]
+    expect(second[0]).toBe(0)
+    expect(first[0]).toBeCloseTo(Math.sqrt(2 / 3), 15)
+    expect(second[1]).toBeCloseTo(Math.SQRT1_2, 15)
+    expect(second[2]).toBeCloseTo(-Math.SQRT1_2, 15)
+  })
+})
