@@ -1,0 +1,8 @@
+import { MODEL_RULES } from '@/lib/urdf/rules-of-model'
+import { TEXT_RULES } from '@/lib/urdf/rules-of-text'
+import { WARNING_RULES } from '@/lib/urdf/rules-of-warning'
+
+/** The one table of findings: a new rule is a row in one of these three and a check that reports it. Slugs never change. */
+export const RULES = { ...TEXT_RULES, ...MODEL_RULES, ...WARNING_RULES } as const
+
+export type RuleId = keyof typeof RULES

@@ -1,0 +1,32 @@
+import { describe, expect, it } from 'vitest'
+import { RULES, type RuleId } from '@/lib/urdf/rules'
+import { parse, rulesOf } from './urdf-text'
+
+/** Their examples are shortened with an ellipsis; parse-urdf.test.ts triggers them at full length. */
+const SHORTENED: readonly RuleId[] = ['too-deep', 'too-many-elements', 'too-many-attributes', 'name-too-long']
+const ids = Object.keys(RULES) as RuleId[]
+
+describe('RULES', () => {
+  it.each(ids.filter((id) => !SHORTENED.includes(id)))('shows for %s an example that triggers exactly this rule, and one that triggers none', (id) => {
+    expect(rulesOf(parse(RULES[id].before).findings)).toEqual([id])
+    expect(parse(RULES[id].after).findings).toEqual([])
+  })
+
+  it.each(ids)('words %s in whole sentences and with a slug fit for an address', (id) => {
+    const rule = RULES[id]
+    expect(id).toMatch(/^[a-z]+(-[a-z]+)*$/)
+    for (const text of [rule.meaning, rule.effect, rule.remedy]) expect(text).toMatch(/^[A-Z<].*\.$/s)
+    expect(rule.title).toMatch(/^[A-Z].*[^.]$/)
+  })
+
+  it('has every rule of the model, and the rules of the text that are checked, as errors', () => {
+    const errors = ids.filter((id) => RULES[id].severity === 'error')
+    expect(errors).toEqual([
+      'not-xml', 'xml-malformed', 'encoding-unsupported', 'doctype-refused', 'too-deep', 'too-many-elements', 'too-many-attributes',
+      'name-too-long', 'text-after-robot', 'not-urdf', 'no-links', 'duplicate-link', 'duplicate-joint', 'name-missing',
+      'joint-incomplete', 'joint-type-unknown', 'link-undeclared', 'several-roots', 'two-parents', 'cycle', 'axis-zero',
+      'number-malformed', 'limit-missing', 'limit-inverted', 'mimic-missing', 'mimic-self', 'mimic-cycle', 'orientation-twice',
+      'xacro-unexpanded',
+    ])
+  })
+})
