@@ -1,0 +1,4 @@
+import { transitionRevision } from '@/lib/catalog/transition-revision'
+import { resource } from '@/lib/http/resource'
+
+export const { GET, HEAD, OPTIONS, POST, PUT, PATCH, DELETE } = resource({ transitionRevision })

@@ -1,0 +1,123 @@
+import type { z } from 'zod'
+import type { UseCase } from '@/lib/access/use-case'
+import type { JointRatesResult } from '@/lib/contract/kinematic-answers'
+import type { Inverse as InverseQuestion, Secondary } from '@/lib/contract/kinematic-quantities'
+import { JOINT_RATES_FIELDS, type JointRatesQuestion } from '@/lib/contract/kinematic-questions'
+import { finishInSlices, inSlices } from '@/lib/in-slices'
+import { closedLoopTwist, type Reference } from '@/lib/kinematics/closed-loop-twist'
+import { forwardKinematics } from '@/lib/kinematics/forward-kinematics'
+import { DEFAULT_INVERSE, type Inverse, rankTolerance } from '@/lib/kinematics/inverse'
+import { RANK_TOLERANCE } from '@/lib/kinematics/measures'
+import type { Objective } from '@/lib/kinematics/objectives'
+import { resolveRates } from '@/lib/kinematics/resolve-rates'
+import { structuralLossInSteps } from '@/lib/kinematics/structural-loss'
+import { begin, type Begun, checkAnswerSize, readPose, taskOf } from './begin'
+import { includedFields, pick } from './included'
+import { type SiReader, TWIST_KINDS } from './si'
+
+const DEFAULT_GAIN = 1
+const DEFAULT_ADAPTIVE = { threshold: 0.02, maxDamping: 0.05 }
+
+function readInverse(question: InverseQuestion | undefined, read: SiReader): Inverse {
+  if (question === undefined) return DEFAULT_INVERSE
+  const si = (value: number, name: string) => read.number(value, null, `/inverse/${name}`)
+  switch (question.method) {
+    case 'truncated':
+      return { method: 'truncated', tolerance: question.tolerance ?? RANK_TOLERANCE }
+    case 'damped':
+      return { method: 'damped', damping: si(question.damping, 'damping') }
+    case 'adaptive-damped':
+      return {
+        method: 'adaptive-damped',
+        threshold: si(question.threshold ?? DEFAULT_ADAPTIVE.threshold, 'threshold'),
+        maxDamping: si(question.maxDamping ?? DEFAULT_ADAPTIVE.maxDamping, 'maxDamping'),
+      }
+  }
+}
+
+const readObjectives = (secondary: readonly Secondary[] | undefined, { read, kinds }: Begun): Objective[] =>
+  (secondary ?? []).map((objective, i) => {
+    const pointer = `/secondary/${i}`
+    const gain = read.number(objective.gain, null, `${pointer}/gain`)
+    if (objective.objective === 'mid-range') return { objective: 'mid-range', gain }
+    return { objective: 'posture', gain, posture: read.list(objective.posture, kinds, `${pointer}/posture`, 'the chain') }
+  })
+
+const readTwist = (read: SiReader, twist: readonly number[], pointer: string) => read.list(twist, TWIST_KINDS, pointer, 'a twist')
+
+function readReference(read: SiReader, reference: NonNullable<JointRatesQuestion['references']>[number], pointer: string): Reference {
+  const gain = (name: 'position' | 'orientation') => read.number(reference.gains?.[name] ?? DEFAULT_GAIN, null, `${pointer}/gains/${name}`)
+  return {
+    baseFromGoal: readPose(read, reference.pose, `${pointer}/pose`),
+    ...(reference.twist === undefined ? {} : { twist: readTwist(read, reference.twist, `${pointer}/twist`) }),
+    positionGain: gain('position'),
+    orientationGain: gain('orientation'),
+  }
+}
+
+/** The n-th of a list that has one entry for each configuration, or one for all. */
+const nth = <T>(list: readonly T[], index: number): T => list[list.length === 1 ? 0 : index]!
+
+/** Two twists, the singular values, single numbers and what the diagnosis says of the pose. */
+const NUMBERS_BESIDE_JOINTS = 6 + 6 + 6 + 22
+/** What the diagnosis may say of a joint takes as much as this many numbers. */
+const NUMBERS_A_JOINT_DIAGNOSED = 4
+const RATE_FIELDS = ['rates', 'primaryRates', 'secondaryRates'] as const
+
+/** Joint rates that move the tool as asked at each configuration, and what became of the wish. */
+export const answerJointRates: UseCase<'jointRates'> = async (caller, { at, body }) => {
+  const begun = await begin(caller, at, body)
+  const { chain, work, configurations, tipFromTool, kinds, read, write, envelope } = begun
+  const count = configurations.length
+  const task = taskOf(body.task)
+  const inverse = readInverse(body.inverse, read)
+  const secondary = readObjectives(body.secondary, begun)
+  const twists = body.twists?.map((twist, i) => readTwist(read, twist, `/twists/${i}`)) ?? []
+  const references = body.references?.map((reference, i) => readReference(read, reference, `/references/${i}`)) ?? []
+  if (body.twists !== undefined) read.matched(twists.length, count, '/twists')
+  if (body.references !== undefined) read.matched(references.length, count, '/references')
+  read.finish()
+  const wanted = includedFields(JOINT_RATES_FIELDS, body.include)
+  const numbersAJoint = RATE_FIELDS.filter((field) => wanted.has(field)).length + (wanted.has('diagnosis') ? NUMBERS_A_JOINT_DIAGNOSED : 0)
+  checkAnswerSize(count, NUMBERS_BESIDE_JOINTS + numbersAJoint * kinds.length)
+
+  const policy = {
+    task,
+    inverse,
+    secondary,
+    limits: { rates: body.limits?.rates ?? ('scale' as const), derating: body.limits?.derating ?? 1 },
+    structural: await finishInSlices(structuralLossInSteps(chain, task, { tolerance: rankTolerance(inverse), ...(tipFromTool && { tipFromTool }) })),
+  }
+  const results: z.infer<typeof JointRatesResult>[] = []
+  await inSlices(count, (index) => {
+    forwardKinematics(chain, configurations[index]!, work, tipFromTool)
+    const twist = body.references === undefined ? nth(twists, index) : closedLoopTwist(work, nth(references, index), task.frame)
+    const outcome = resolveRates(chain, work, twist, policy)
+    results.push(
+      pick<z.infer<typeof JointRatesResult>>(wanted, {
+        rates: () => write.list(outcome.rates, kinds),
+        primaryRates: () => write.list(outcome.primaryRates, kinds),
+        secondaryRates: () => write.list(outcome.secondaryRates, kinds),
+        scale: () => outcome.scale,
+        secondaryScale: () => outcome.secondaryScale,
+        achievedTwist: () => write.list(outcome.achievedTwist, TWIST_KINDS),
+        residual: () => write.list(outcome.residual, TWIST_KINDS),
+        singularValues: () => outcome.singularValues,
+        rank: () => outcome.rank,
+        nullity: () => outcome.nullity,
+        damping: () => outcome.damping,
+        saturated: () => [],
+        manipulability: () => outcome.manipulability,
+        toolSpeed: () => write.number(outcome.toolSpeed, 'length'),
+        diagnosis: () =>
+          outcome.diagnosis.map(({ code, detail, direction, joint }) => ({
+            code,
+            detail,
+            ...(direction === undefined ? {} : { direction }),
+            ...(joint === undefined ? {} : { joint }),
+          })),
+      }),
+    )
+  })
+  return { body: { ...envelope, results } }
+}

@@ -1,0 +1,45 @@
+import type { z } from 'zod'
+import type { UseCase } from '@/lib/access/use-case'
+import type { NullSpaceResult } from '@/lib/contract/kinematic-answers'
+import { NULL_SPACE_FIELDS } from '@/lib/contract/kinematic-questions'
+import { finishInSlices, inSlices } from '@/lib/in-slices'
+import { forwardKinematics } from '@/lib/kinematics/forward-kinematics'
+import { RANK_TOLERANCE } from '@/lib/kinematics/measures'
+import { nullSpace } from '@/lib/kinematics/null-space'
+import { structuralLossInSteps } from '@/lib/kinematics/structural-loss'
+import { begin, checkAnswerSize, taskOf } from './begin'
+import { includedFields, pick } from './included'
+
+/** A lost direction has 6 numbers, and at most 6 are lost. */
+const NUMBERS_BESIDE = 6 + 6 * 6
+
+/** The joint rates that leave a task untouched, and the directions that are lost, at each configuration. */
+export const answerNullSpace: UseCase<'nullSpace'> = async (caller, { at, body }) => {
+  const { chain, work, configurations, tipFromTool, characteristicLength, read, envelope } = await begin(caller, at, body)
+  read.finish()
+  const task = taskOf(body.task)
+  const n = chain.joints.length
+  const wanted = includedFields(NULL_SPACE_FIELDS, body.include, ['projector'])
+  const withProjector = wanted.has('projector')
+  const withBasis = wanted.has('basis')
+  checkAnswerSize(configurations.length, NUMBERS_BESIDE + (withBasis ? n * n : 0) + (withProjector ? n * n : 0))
+  const options = { characteristicLength, tolerance: body.tolerance ?? RANK_TOLERANCE }
+  const structural = await finishInSlices(structuralLossInSteps(chain, task, { ...options, ...(tipFromTool && { tipFromTool }) }))
+
+  const results: z.infer<typeof NullSpaceResult>[] = []
+  await inSlices(configurations.length, (index) => {
+    forwardKinematics(chain, configurations[index]!, work, tipFromTool)
+    const space = nullSpace(chain, work, task, structural, { ...options, withProjector, withBasis })
+    results.push(
+      pick<z.infer<typeof NullSpaceResult>>(wanted, {
+        rank: () => space.rank,
+        nullity: () => space.nullity,
+        singularValues: () => space.singularValues,
+        basis: () => space.basis,
+        lostDirections: () => space.lostDirections,
+        projector: () => space.projector,
+      }),
+    )
+  })
+  return { body: { ...envelope, results } }
+}

@@ -1,0 +1,43 @@
+import type { z } from 'zod'
+import type { ProblemCode } from '@/lib/errors'
+
+export type Method = 'GET' | 'POST' | 'PUT' | 'PATCH' | 'DELETE'
+
+/** One operation of the contract, declared once. The route, the reference page, the OpenAPI document, the browser's
+ *  calls and the tests all read this. Permissions stand in lib/access/permissions.ts. */
+export interface Operation {
+  readonly method: Method
+  /** Under /api/v1, with {parameters}. */
+  readonly path: string
+  readonly tag: 'Catalog' | 'Kinematics' | 'Keys'
+  readonly summary: string
+  readonly description?: string
+  readonly query?: z.ZodObject
+  /** A JSON body. */
+  readonly body?: z.ZodObject
+  /** The text fields of a multipart body that also carries `file`. */
+  readonly form?: z.ZodObject
+  readonly answer: {
+    readonly status: 200 | 201 | 204
+    readonly schema?: z.ZodType
+    /** Set when the answer is bytes and not JSON. */
+    readonly mediaType?: string
+  }
+  /** The `results` of the answer are many: each is parsed and written with `item`, in slices. */
+  readonly item?: z.ZodType
+  /** Problems beyond those that follow from the rest of the declaration (see common-problems.ts). */
+  readonly errors: readonly ProblemCode[]
+  /** Honours If-Match: "<fingerprint>" and answers Model-Fingerprint. */
+  readonly pinned?: true
+  /** Changes a stored thing: needs If-Match with its ETag. */
+  readonly edits?: true
+  /** Answers an ETag and honours If-None-Match. */
+  readonly conditional?: true
+  /** The answer never changes. */
+  readonly immutable?: true
+  /** A request body that works on the demo's models; executed by the tests and shown in the reference. */
+  readonly example?: unknown
+}
+
+/** Keeps the literal types of a declaration. */
+export const operation = <const T extends Operation>(declaration: T): T => declaration

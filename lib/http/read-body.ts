@@ -1,0 +1,87 @@
+import { fail } from '@/lib/errors'
+import type { UploadedFile } from '@/lib/access/use-case'
+import { pointerOf } from './faults'
+import { checkJsonShape } from './json-shape'
+
+const MEBIBYTE = 1024 * 1024
+export const MOST_JSON_BYTES = 8 * MEBIBYTE
+export const MOST_URDF_BYTES = 8 * MEBIBYTE
+/** What the text fields and the boundaries of a multipart body may take beside the file. */
+const MULTIPART_ROOM = 64 * 1024
+
+/** Reads the body up to `most` bytes and stops there: fails with too-large. */
+async function readBytes(request: Request, most: number, what: string): Promise<Uint8Array> {
+  const tooLarge = () => fail('too-large', `${what} may have at most ${most} bytes. Reading stopped there; nothing was stored.`)
+  const declared = Number(request.headers.get('content-length') ?? 0)
+  if (declared > most) tooLarge()
+  if (request.body === null) return new Uint8Array()
+  const pieces: Uint8Array[] = []
+  let length = 0
+  for (const reader = request.body.getReader(); ; ) {
+    const { done, value } = await reader.read()
+    if (done) break
+    length += value.length
+    if (length > most) {
+      await reader.cancel().catch(() => undefined)
+      tooLarge()
+    }
+    pieces.push(value)
+  }
+  return new Uint8Array(Buffer.concat(pieces, length))
+}
+
+/** Fails with unsupported-media-type unless the body is of this type, uncompressed, and UTF-8 where it says a charset. */
+export function checkContentType(headers: Headers, mediaType: string): void {
+  const encoding = headers.get('content-encoding')
+  if (encoding !== null && encoding.toLowerCase() !== 'identity') fail('unsupported-media-type', 'Send the body without a content encoding.')
+  const [name = '', ...parameters] = (headers.get('content-type') ?? '').split(';').map((part) => part.trim().toLowerCase())
+  if (name !== mediaType) fail('unsupported-media-type', `Send the body as ${mediaType}.`)
+  const charset = parameters.find((parameter) => parameter.startsWith('charset='))?.slice(8).replaceAll('"', '')
+  if (charset !== undefined && charset !== 'utf-8' && charset !== 'utf8') fail('unsupported-media-type', 'Send the body in UTF-8.')
+}
+
+/** The JSON body. Fails with too-large, malformed-body, or invalid-request where it is built to be a burden. */
+export async function readJson(request: Request): Promise<unknown> {
+  const bytes = await readBytes(request, MOST_JSON_BYTES, 'The body')
+  let text: string
+  try {
+    text = new TextDecoder('utf-8', { fatal: true }).decode(bytes)
+  } catch {
+    fail('malformed-body', 'The body is not UTF-8.')
+  }
+  checkJsonShape(bytes)
+  try {
+    return JSON.parse(text)
+  } catch (error) {
+    fail('malformed-body', `The body is not JSON: ${error instanceof Error ? error.message : 'it does not parse'}.`)
+  }
+}
+
+/** The multipart body: its one file and its text fields. Fails with too-large, malformed-body or invalid-request. */
+export async function readForm(request: Request): Promise<{ fields: Record<string, string>; file: UploadedFile }> {
+  const bytes = await readBytes(request, MOST_URDF_BYTES + MULTIPART_ROOM, 'The upload')
+  let data: FormData
+  try {
+    data = await new Response(bytes as BodyInit, { headers: { 'content-type': request.headers.get('content-type') ?? '' } }).formData()
+  } catch {
+    fail('malformed-body', 'The body is not multipart/form-data, or it ends before its closing boundary.')
+  }
+  const fields: Record<string, string> = Object.create(null)
+  let file: UploadedFile | undefined
+  for (const [name, value] of data) {
+    const repeated = name === 'file' ? file !== undefined : name in fields
+    if (repeated) fail('invalid-request', undefined, { errors: [{ pointer: pointerOf('/form', [name]), detail: 'is given more than once' }] })
+    if (typeof value === 'string') {
+      fields[name] = value
+    } else if (name === 'file') {
+      file = { name: value.name, bytes: new Uint8Array(await value.arrayBuffer()) }
+    } else {
+      fail('invalid-request', undefined, { errors: [{ pointer: pointerOf('/form', [name]), detail: 'is a file; the file goes into the part named "file"' }] })
+    }
+  }
+  if (file === undefined) {
+    fail('invalid-request', undefined, { errors: [{ pointer: '/form/file', detail: 'is missing: send the URDF as a file in the part named "file"' }] })
+  }
+  if (file.bytes.length > MOST_URDF_BYTES) fail('too-large', `A URDF may have at most ${MOST_URDF_BYTES} bytes; this one has ${file.bytes.length}.`)
+  return { fields, file }
+}
