@@ -1,0 +1,3 @@
+import { SheetSkeleton } from '@/components/sheet/sheet-skeleton'
+
+export default SheetSkeleton

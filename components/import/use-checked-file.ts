@@ -1,0 +1,71 @@
+import { useCallback, useRef, useState } from 'react'
+import { Refusal, sentenceOf } from '@/components/api/refusal'
+import { upload } from '@/components/api/upload'
+import type { Finding, Structure } from '@/lib/contract/description'
+import { fileSizeText, MOST_BYTES } from './file-size'
+import { sourceText } from './source-text'
+
+export interface CheckedFile {
+  readonly file: File
+  /** null until it is read, or when it is too large to show. */
+  readonly text: string | null
+  readonly state: 'sending' | 'checked' | 'failed'
+  readonly sent: number
+  readonly findings: readonly Finding[]
+  /** undefined when an error stands in the way. */
+  readonly structure: Structure | undefined
+  /** Why it was not checked. */
+  readonly failure?: string
+}
+
+interface Checking {
+  readonly checked: CheckedFile | null
+  readonly check: (file: File) => void
+  readonly cancel: () => void
+  /** Puts findings in place that came with a refusal to store. */
+  readonly replaceFindings: (findings: CheckedFile['findings']) => void
+}
+
+const BLANK = { text: null, sent: 0, findings: [], structure: undefined } as const
+
+/** The file that is being looked at: read in the browser for the source view, and checked by the service, which stores nothing. */
+export function useCheckedFile(team: string): Checking {
+  const [checked, setChecked] = useState<CheckedFile | null>(null)
+  const running = useRef<AbortController | null>(null)
+
+  const check = useCallback(
+    (file: File) => {
+      running.current?.abort()
+      const control = new AbortController()
+      running.current = control
+      const update = (change: Partial<CheckedFile>) => {
+        if (!control.signal.aborted) setChecked((known) => (known?.file === file ? { ...known, ...change } : known))
+      }
+      if (file.size > MOST_BYTES) {
+        setChecked({ ...BLANK, file, state: 'failed', failure: `The file has ${fileSizeText(file.size)}; at most 8 MiB are read. Nothing was sent.` })
+        return
+      }
+      setChecked({ ...BLANK, file, state: 'sending' })
+      file.arrayBuffer().then(
+        (bytes) => update({ text: sourceText(new Uint8Array(bytes)) }),
+        () => update({ state: 'failed', failure: 'The browser cannot read this file. If it is a folder, choose the .urdf file inside it.' }),
+      )
+      upload('checkImport', { path: { team }, file, signal: control.signal }, (bytes) => update({ sent: bytes })).then(
+        ({ findings, structure }) => update({ state: 'checked', findings, structure }),
+        (error: unknown) => update({ state: 'failed', failure: sentenceOf(error) }),
+      )
+    },
+    [team],
+  )
+
+  const cancel = useCallback(() => {
+    running.current?.abort()
+    setChecked((known) => (known === null ? null : { ...known, state: 'failed', failure: new Refusal('cancelled', 'Cancelled. Nothing was stored.').message }))
+  }, [])
+
+  const replaceFindings = useCallback((findings: CheckedFile['findings']) => {
+    setChecked((known) => (known === null ? null : { ...known, state: 'checked', findings, structure: undefined }))
+  }, [])
+
+  return { checked, check, cancel, replaceFindings }
+}
