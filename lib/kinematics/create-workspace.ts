@@ -11,6 +11,10 @@ export interface Workspace {
   readonly prepared: PreparedChain
   /** The configuration of the pose: n (rad or m). */
   readonly q: Float64Array
+  /** What each motion turns by (rad), the sine and cosine of that, and what it slides by (m). */
+  readonly angles: Float64Array
+  readonly turns: Float64Array
+  readonly slides: Float64Array
   /** A frame (12 numbers) for each motion, after it: the origin lies on its axis, z is along it. */
   readonly baseFromMotions: Float64Array
   readonly baseFromTip: Float64Array
@@ -43,6 +47,9 @@ export function createWorkspace(chain: Chain): Workspace {
     chain,
     prepared: prepareChain(chain),
     q: new Float64Array(n),
+    angles: new Float64Array(chain.motions.length),
+    turns: new Float64Array(2 * chain.motions.length),
+    slides: new Float64Array(chain.motions.length),
     baseFromMotions: new Float64Array(TRANSFORM_SIZE * chain.motions.length),
     baseFromTip: identityTransform(),
     tipFromTool: identityTransform(),
