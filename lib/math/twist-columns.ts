@@ -51,3 +51,15 @@ export function turnIntoFrame(frame: ArrayLike<number>, twists: ArrayLike<number
     }
   }
 }
+
+/** The way back: both blocks multiplied by R of the transform, in place. */
+export function turnOutOfFrame(frame: ArrayLike<number>, twists: Float64Array | number[], columns: number): void {
+  for (let block = 0; block < 6 * columns; block += 3 * columns) {
+    for (let column = block; column < block + columns; column++) {
+      const x = twists[column]!, y = twists[column + columns]!, z = twists[column + 2 * columns]!
+      twists[column] = frame[0]! * x + frame[1]! * y + frame[2]! * z
+      twists[column + columns] = frame[4]! * x + frame[5]! * y + frame[6]! * z
+      twists[column + 2 * columns] = frame[8]! * x + frame[9]! * y + frame[10]! * z
+    }
+  }
+}
