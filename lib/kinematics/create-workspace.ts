@@ -2,7 +2,11 @@ import { identityTransform, TRANSFORM_SIZE } from '@/lib/math/rigid-transform'
 import { createSingularValues, type SingularValues } from '@/lib/math/singular-values'
 import type { Chain } from './chain'
 import { prepareChain, type PreparedChain } from './prepared-chain'
-import { TWIST_SIZE } from './task'
+import { createRateBounds, type RateBounds } from './rate-bounds'
+import type { RateScaling } from './rate-scaling'
+import type { Saturation } from './saturate-rates'
+import type { Solved } from './solve-rates'
+import { LINEAR_COMPONENTS, TWIST_SIZE } from './task'
 
 /** Scratch for one chain, allocated once and overwritten by each computation; one workspace serves one computation at a time.
  *  forwardKinematics fills the pose, everything else builds on the pose that it finds here. n joints, m motions. */
@@ -11,6 +15,10 @@ export interface Workspace {
   readonly prepared: PreparedChain
   /** The configuration of the pose: n (rad or m). */
   readonly q: Float64Array
+  /** What each motion turns by (rad), the sine and cosine of that, and what it slides by (m). */
+  readonly angles: Float64Array
+  readonly turns: Float64Array
+  readonly slides: Float64Array
   /** A frame (12 numbers) for each motion, after it: the origin lies on its axis, z is along it. */
   readonly baseFromMotions: Float64Array
   readonly baseFromTip: Float64Array
@@ -24,15 +32,41 @@ export interface Workspace {
   /** The rows of the task, components x n. */
   readonly taskJacobian: Float64Array
   readonly taskValues: SingularValues
-  /** What the inverse multiplies each singular direction by: σ / (σ² + λ²), 0 where it is truncated. */
+  /** Row-major m x n with orthonormal rows that span what the task feels, and the lower triangle L of taskJacobian = L · rows: filled
+   *  in place of taskValues where the pose is an easy one (see resolveRates). */
+  readonly rows: Float64Array
+  readonly lower: Float64Array
+  /** What the inverse multiplies each singular direction by, σ / (σ² + λ²), or 0 where it is truncated; its λ; and σ²/(σ² + λ²). */
   readonly gains: Float64Array
-  /** The asked twist's task components. */
+  readonly lambdas: Float64Array
+  readonly delivered: Float64Array
+  /** The asked twist's task components, and the same by orthonormal row or singular direction. */
   readonly asked: Float64Array
+  readonly byRow: Float64Array
   readonly primary: Float64Array
   readonly secondary: Float64Array
+  /** Joint weights (see prepareWeights): their square roots, and the factors of rows · W^(−½). */
+  readonly rootWeights: Float64Array
+  readonly scaledRows: Float64Array
+  readonly weightedRows: Float64Array
+  readonly weightedLower: Float64Array
+  /** Small squares and vectors of the task's size. */
+  readonly square: Float64Array
+  readonly coordinates: Float64Array
+  /** How the task Jacobian was solved (see solvePrimary). */
+  readonly solved: Solved
+  readonly bounds: RateBounds
+  readonly scaling: RateScaling
+  /** Made when first needed. */
+  saturation: Saturation | null
+  /** 6 a motion (see motionTwists). */
+  readonly motionTwists: Float64Array
+  readonly slopes: { readonly pulls: Float64Array; readonly pull: Float64Array; readonly turnedAlong: Float64Array; readonly carriedBefore: Float64Array }
   /** A second workspace, for a pose a small step ahead; made when first needed. */
   ahead: Workspace | null
 }
+
+const NO_ROWS = new Float64Array(0)
 
 /** Allocates everything that computing with `chain` needs, and prepares its numeric form. */
 export function createWorkspace(chain: Chain): Workspace {
@@ -43,6 +77,9 @@ export function createWorkspace(chain: Chain): Workspace {
     chain,
     prepared: prepareChain(chain),
     q: new Float64Array(n),
+    angles: new Float64Array(chain.motions.length),
+    turns: new Float64Array(2 * chain.motions.length),
+    slides: new Float64Array(chain.motions.length),
     baseFromMotions: new Float64Array(TRANSFORM_SIZE * chain.motions.length),
     baseFromTip: identityTransform(),
     tipFromTool: identityTransform(),
@@ -51,10 +88,32 @@ export function createWorkspace(chain: Chain): Workspace {
     tipJacobian: new Float64Array(TWIST_SIZE * n),
     taskJacobian: new Float64Array(TWIST_SIZE * n),
     taskValues: createSingularValues(TWIST_SIZE, n),
+    rows: new Float64Array(TWIST_SIZE * n),
+    lower: new Float64Array(TWIST_SIZE * TWIST_SIZE),
     gains: new Float64Array(TWIST_SIZE),
+    lambdas: new Float64Array(TWIST_SIZE),
+    delivered: new Float64Array(TWIST_SIZE),
     asked: new Float64Array(TWIST_SIZE),
+    byRow: new Float64Array(TWIST_SIZE),
     primary: new Float64Array(n),
     secondary: new Float64Array(n),
+    rootWeights: new Float64Array(n),
+    scaledRows: new Float64Array(TWIST_SIZE * n),
+    weightedRows: new Float64Array(TWIST_SIZE * n),
+    weightedLower: new Float64Array(TWIST_SIZE * TWIST_SIZE),
+    square: new Float64Array(TWIST_SIZE * TWIST_SIZE),
+    coordinates: new Float64Array(TWIST_SIZE),
+    solved: { rows: NO_ROWS, rank: 0, damping: 0, easy: false, wished: 0 },
+    bounds: createRateBounds(n),
+    scaling: { scale: 1, secondaryScale: 1 },
+    saturation: null,
+    motionTwists: new Float64Array(TWIST_SIZE * chain.motions.length),
+    slopes: {
+      pulls: new Float64Array(TWIST_SIZE * n),
+      pull: new Float64Array(TWIST_SIZE),
+      turnedAlong: new Float64Array(LINEAR_COMPONENTS),
+      carriedBefore: new Float64Array(LINEAR_COMPONENTS),
+    },
     ahead: null,
   }
 }

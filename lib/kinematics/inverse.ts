@@ -8,6 +8,7 @@ export type Inverse =
   | { readonly method: 'truncated'; readonly tolerance: number }
   | { readonly method: 'damped'; readonly damping: number }
   | { readonly method: 'adaptive-damped'; readonly threshold: number; readonly maxDamping: number }
+  | { readonly method: 'filtered'; readonly threshold: number; readonly damping: number }
 
 /** What is used where nothing is said. */
 export const DEFAULT_INVERSE: Inverse = Object.freeze({ method: 'adaptive-damped', threshold: 0.02, maxDamping: 0.05 })
@@ -17,28 +18,53 @@ export function rankTolerance(inverse: Inverse): number {
   return inverse.method === 'truncated' ? inverse.tolerance : RANK_TOLERANCE
 }
 
-/** Fills work.gains for the first `count` singular values in `work` and returns λ.
- *  Damped: σ / (σ² + λ²), Nakamura & Hanafusa 1986, Wampler 1986. Without damping 1/σ up to the rank, 0 beyond.
- *  Adaptive: λ² = (1 − (σmin/ε)²)·λmax² while σmin < ε, Chiaverini, Siciliano & Egeland 1994. */
-export function fillGains(work: Workspace, count: number, rank: number, size: number, inverse: Inverse): number {
-  const { values } = work.taskValues
-  const lambda = dampingOf(inverse, count === 0 ? Number.POSITIVE_INFINITY : values[count - 1]!)
-  // A value below rounding has a direction that is rounding too; damping leaves the rest as it is.
-  const divisible = lambda > 0 ? numericalRank(values, count, 0, size) : rank
-  for (let k = 0; k < count; k++) work.gains[k] = k < divisible ? 1 / (values[k]! + lambda * (lambda / values[k]!)) : 0
-  return lambda
+/** The smallest singular value from which on an inverse damps nothing. */
+export function undampedFrom(inverse: Inverse): number {
+  if (inverse.method === 'truncated') return 0
+  if (inverse.method === 'damped') return inverse.damping === 0 ? 0 : Number.POSITIVE_INFINITY
+  return inverse.threshold
 }
 
-function dampingOf(inverse: Inverse, smallest: number): number {
+/** Fills work.gains, work.lambdas and work.delivered for the first `count` singular values in `work` and returns the largest λ.
+ *  Damped: σ / (σ² + λ²), Nakamura & Hanafusa 1986, Wampler 1986. Without damping 1/σ up to the rank, 0 beyond.
+ *  Adaptive: λ² = (1 − (σmin/ε)²)·λmax² while σmin < ε, Chiaverini, Siciliano & Egeland 1994.
+ *  Filtered: only the directions that vanish are damped, each by itself, Maciejewski & Klein 1988. */
+export function fillGains(work: Workspace, count: number, rank: number, size: number, inverse: Inverse): number {
+  const { gains, lambdas, delivered } = work
+  const { values } = work.taskValues
+  let largest = 0
+  for (let k = 0; k < count; k++) {
+    lambdas[k] = dampingOf(inverse, values[k]!, values[count - 1]!)
+    largest = Math.max(largest, lambdas[k]!)
+  }
+  // A value below rounding has a direction that is rounding too; damping leaves the rest as it is.
+  const divisible = largest > 0 ? numericalRank(values, count, 0, size) : rank
+  for (let k = 0; k < count; k++) {
+    const lambda = lambdas[k]!
+    gains[k] = k < divisible ? 1 / (values[k]! + lambda * (lambda / values[k]!)) : 0
+    delivered[k] = gains[k]! * values[k]!
+  }
+  return largest
+}
+
+/** λ of the direction with the given singular value. */
+function dampingOf(inverse: Inverse, value: number, smallest: number): number {
   switch (inverse.method) {
     case 'truncated':
       return 0
     case 'damped':
       return inverse.damping
-    case 'adaptive-damped': {
-      if (smallest >= inverse.threshold) return 0
-      const part = smallest / inverse.threshold
-      return Math.sqrt(1 - part * part) * inverse.maxDamping
-    }
+    case 'adaptive-damped':
+      return Math.sqrt(below(smallest, inverse.threshold)) * inverse.maxDamping
+    case 'filtered':
+      // Whole up to half the threshold, then less, so that the rates do not jump where a direction crosses it.
+      return Math.sqrt(Math.min(1, (4 / 3) * below(value, inverse.threshold))) * inverse.damping
   }
+}
+
+/** 1 − (value/threshold)², and 0 from the threshold on. */
+function below(value: number, threshold: number): number {
+  if (value >= threshold) return 0
+  const part = value / threshold
+  return 1 - part * part
 }

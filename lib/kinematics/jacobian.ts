@@ -1,5 +1,5 @@
 import { TRANSFORM_SIZE } from '@/lib/math/rigid-transform'
-import { addSliding, addTurning, turnIntoFrame } from '@/lib/math/twist-columns'
+import { addSliding, addTurning, fillColumns, turnIntoFrame } from '@/lib/math/twist-columns'
 import type { Chain } from './chain'
 import type { Workspace } from './create-workspace'
 import type { TaskFrame } from './task'
@@ -8,15 +8,20 @@ import type { TaskFrame } from './task'
  *  point the tool's, in base axes or turned into the tool's. m/s per rad/s or m/s, and rad/s per rad/s. A mimic joint adds its column,
  *  times its multiplier, to the column of the joint it follows. Returns the array of `work` that holds it. Whitney 1972. */
 export function jacobian(chain: Chain, work: Workspace, frame: TaskFrame = 'base'): Float64Array {
-  const { rotary, joint, multiplier } = work.prepared
   const n = chain.joints.length
-  work.jacobian.fill(0)
-  for (let i = 0; i < rotary.length; i++) {
-    const at = TRANSFORM_SIZE * i
-    if (rotary[i] === 1) addTurning(work.baseFromMotions, at, work.baseFromTool, multiplier[i]!, work.jacobian, n, joint[i]!)
-    else addSliding(work.baseFromMotions, at, multiplier[i]!, work.jacobian, n, joint[i]!)
-  }
+  if (work.prepared.plain) fillColumns(work.baseFromMotions, work.prepared.rotary, work.baseFromTool, n, work.jacobian)
+  else addColumns(work, n)
   if (frame === 'base') return work.jacobian
   turnIntoFrame(work.baseFromTool, work.jacobian, n, work.tipJacobian)
   return work.tipJacobian
+}
+
+function addColumns({ prepared, baseFromMotions, baseFromTool, jacobian: out }: Workspace, n: number): void {
+  const { rotary, joint, multiplier } = prepared
+  out.fill(0)
+  for (let i = 0; i < rotary.length; i++) {
+    const at = TRANSFORM_SIZE * i
+    if (rotary[i] === 1) addTurning(baseFromMotions, at, baseFromTool, multiplier[i]!, out, n, joint[i]!)
+    else addSliding(baseFromMotions, at, multiplier[i]!, out, n, joint[i]!)
+  }
 }

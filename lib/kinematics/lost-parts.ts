@@ -19,19 +19,22 @@ export type Cause = 'never' | 'always-one' | 'pose'
 export interface LostPart {
   /** Unit, 6 numbers in twist order, in the task's frame. */
   readonly direction: number[]
+  /** Whether the twist asks for it or for its opposite. */
+  readonly asked: 1 | -1
   readonly cause: Cause
 }
 
-/** The directions in which the asked twist in `work` (work.asked, with work.gains and work.taskValues of the same pose) is lost:
+/** The directions in which the asked twist in `work` (work.asked, with work.delivered and work.taskValues of the same pose) is lost:
  *  at most one that is lost for good and one that only this pose lacks. Empty when no more than 1e-6 of the twist is lost. */
 export function lostParts(work: Workspace, task: Task, rank: number, known: StructuralLoss): LostPart[] {
   const m = task.rows.length
-  const { left, values } = work.taskValues
+  const { delivered } = work
+  const { left } = work.taskValues
   const count = Math.min(m, work.q.length)
   const threshold = WORTH_SAYING * norm(work.asked, 0, m)
   const lost = new Float64Array(m)
   for (let k = 0; k < m; k++) {
-    if (k < count && values[k]! * work.gains[k]! >= DELIVERED) continue
+    if (k < count && delivered[k]! >= DELIVERED) continue
     const along = dot(left, k * m, work.asked, 0, m)
     for (let i = 0; i < m; i++) lost[i]! += along * left[k * m + i]!
   }
@@ -47,7 +50,9 @@ export function lostParts(work: Workspace, task: Task, rank: number, known: Stru
   ] as const
   // Either may be below the threshold that both together exceed: then the larger one speaks.
   const loudest = Math.min(threshold, Math.max(norm(forGood), norm(here)))
-  return parts.filter(({ part }) => norm(part) >= loudest).map(({ part, cause }) => ({ direction: inTwist(unit(part), task), cause }))
+  return parts
+    .filter(({ part }) => norm(part) >= loudest)
+    .map(({ part, cause }) => ({ direction: inTwist(unit(part), task), asked: signOf(part), cause }))
 }
 
 /** What of `vector` is orthogonal to the first `count` of the orthonormal rows. */
@@ -62,8 +67,13 @@ function outside(vector: Float64Array, rows: Float64Array, count: number): Float
 }
 
 function unit(part: Float64Array): Float64Array {
+  const length = signOf(part) * norm(part)
+  return part.map((value) => value / length + 0)
+}
+
+/** The sign of the pivot (see canonicalBasis). */
+function signOf(part: Float64Array): 1 | -1 {
   const largest = part.reduce((most, value) => Math.max(most, Math.abs(value)), 0)
   const pivot = part.find((value) => Math.abs(value) >= PIVOT_PART * largest) ?? 1
-  const length = pivot < 0 ? -norm(part) : norm(part)
-  return part.map((value) => value / length + 0)
+  return pivot < 0 ? -1 : 1
 }

@@ -1,3 +1,4 @@
+import { alignBasis } from '@/lib/math/align-basis'
 import { canonicalBasis } from '@/lib/math/canonical-basis'
 import type { Chain } from './chain'
 import type { Workspace } from './create-workspace'
@@ -33,17 +34,19 @@ export interface NullSpaceOptions extends MeasureOptions {
   /** Of a long chain the basis is large: false leaves it out. */
   readonly withBasis?: boolean
   readonly withProjector?: boolean
+  /** n rows of p: a basis, usually that of the configuration before, which the first min(p, nullity) columns are turned to. */
+  readonly alignTo?: readonly (readonly number[])[]
 }
 
 /** Joint motions that the task does not feel, and tool motions that the joints cannot give, at the pose in `work`
- *  (see forwardKinematics). `known` comes from structuralLoss for the same task, tool and options. Liégeois 1977. */
+ *  (see forwardKinematics). `known` comes from structuralLoss for the same task, tool and options. Throws a RangeError when `alignTo` has
+ *  another shape. Liégeois 1977. */
 export function nullSpace(chain: Chain, work: Workspace, task: Task, known: StructuralLoss, options: NullSpaceOptions = {}): NullSpace {
   const n = chain.joints.length
   taskJacobian(chain, work, task, options.characteristicLength)
   const { rank, singularValues } = measuresOf(work, task, options.tolerance)
   const { left, right } = work.taskValues
-  const vectors = options.withBasis === false ? null : canonicalBasis(right, n, rank)
-  const basis = vectors === null ? [] : Array.from({ length: n }, (_row, i) => vectors.map((vector) => vector[i]!))
+  const basis = options.withBasis === false ? [] : basisOf(right, n, rank, options.alignTo)
   const lost = lostDirections(left, task, rank, known)
   return {
     rank,
@@ -53,6 +56,18 @@ export function nullSpace(chain: Chain, work: Workspace, task: Task, known: Stru
     lostDirections: lost,
     ...(options.withProjector === true ? { projector: projector(right, n, rank) } : {}),
   }
+}
+
+function basisOf(right: Float64Array, n: number, rank: number, alignTo: readonly (readonly number[])[] | undefined): number[][] {
+  const canonical = canonicalBasis(right, n, rank)
+  const vectors = alignTo === undefined ? canonical : alignBasis(right, n, rank, canonical, columnsOf(alignTo, n))
+  return Array.from({ length: n }, (_row, i) => vectors.map((vector) => vector[i]!))
+}
+
+function columnsOf(rows: readonly (readonly number[])[], n: number): number[][] {
+  const width = rows[0]?.length ?? 0
+  if (rows.length !== n || rows.some((row) => row.length !== width)) throw new RangeError(`a basis to align to needs ${n} rows of equal length`)
+  return Array.from({ length: width }, (_column, j) => rows.map((row) => row[j]!))
 }
 
 /** I − Σ v·vᵀ over the first `rank` rows of n. */

@@ -1,20 +1,40 @@
 import type { Chain } from './chain'
+import type { Workspace } from './create-workspace'
+import { addManipulabilityGradient } from './manipulability-gradient'
+import type { Task } from './task'
 
-/** What spare freedom is spent on. posture: n values to come near to (rad or m); mid-range: the middles of the joint ranges. gain in SI. */
+/** What spare freedom is spent on. posture: n values to come near to (rad or m); mid-range: the middles of the joint ranges;
+ *  manipulability: away from poses that are singular for the task. gain in SI. */
 export type Objective =
   | { readonly objective: 'posture'; readonly posture: ArrayLike<number>; readonly gain: number }
   | { readonly objective: 'mid-range'; readonly gain: number }
+  | { readonly objective: 'manipulability'; readonly gain: number }
 
 /** Narrower than this a range cannot be squared and divided by; it leaves no room to move in either. */
 const NARROWEST_RANGE = 1e-100
 
-/** Fills `wish` (n; rad/s or m/s) with the sum of the objectives' gradients at `q`, each times its gain, before any projection.
+/** Whether any of the objectives looks at the singular values of the pose. */
+export function needSingularValues(objectives: readonly Objective[]): boolean {
+  for (const { objective } of objectives) if (objective === 'manipulability') return true
+  return false
+}
+
+/** Fills `wish` (n; rad/s or m/s) with the sum of the objectives' gradients at the pose in `work`, each times its gain, before any
+ *  projection. Where needSingularValues, work.taskValues holds those of the task, with the given rank.
  *  Throws a RangeError when a posture has another length. Liégeois 1977. */
-export function fillWish(chain: Chain, q: ArrayLike<number>, objectives: readonly Objective[], wish: Float64Array): void {
+export function fillWish(work: Workspace, task: Task, rank: number, objectives: readonly Objective[], wish: Float64Array): void {
   wish.fill(0)
   for (const objective of objectives) {
-    if (objective.objective === 'posture') addPosture(chain, q, objective.posture, objective.gain, wish)
-    else addMidRange(chain, q, objective.gain, wish)
+    switch (objective.objective) {
+      case 'posture':
+        addPosture(work.chain, work.q, objective.posture, objective.gain, wish)
+        break
+      case 'mid-range':
+        addMidRange(work.chain, work.q, objective.gain, wish)
+        break
+      case 'manipulability':
+        addManipulabilityGradient(work, task, rank, objective.gain, wish)
+    }
   }
 }
 

@@ -1,33 +1,84 @@
 import { axisFrame } from '@/lib/math/axis-frame'
 import { norm } from '@/lib/math/norm'
+import { STEP_SIZE } from '@/lib/math/place-frames'
 import { identityTransform, invertTransform, multiplyTransforms, TRANSFORM_SIZE } from '@/lib/math/rigid-transform'
+import { stepBetweenAxes } from '@/lib/math/step-between-axes'
 import type { Chain } from './chain'
 
-/** The numeric form of a chain: flat arrays, one entry a motion. Each constant is turned so that every motion is about or along
- *  the z axis of the frame reached: baseFromTip = constant[0] · Z(0) · constant[1] · Z(1) · … · constant[m]. */
+/** The numeric form of a chain: flat arrays, one entry a motion. Its frames are laid so that each motion is about or along its own z,
+ *  and that from one to the next there is only a shift and a turn about x (see placeFrames). Turns about z that the description has
+ *  in between belong to the motions: whole quarter turns, which are exact, and what is left of them. */
 export interface PreparedChain {
-  /** m + 1 transforms of 12 numbers. */
-  readonly constants: Float64Array
+  /** Transforms of 12 numbers: to the first motion, and from the last motion to the tip. */
+  readonly baseFromFirst: Float64Array
+  readonly lastFromTip: Float64Array
+  /** STEP_SIZE numbers a motion. */
+  readonly steps: Float64Array
   /** 1 turns, 0 slides. */
   readonly rotary: Uint8Array
   /** The coordinate that a motion follows. */
   readonly joint: Int32Array
   readonly multiplier: Float64Array
+  /** rad or m. */
   readonly offset: Float64Array
+  readonly quarters: Int32Array
+  /** rad. */
+  readonly rest: Float64Array
+  /** Whether there is one motion for each coordinate, in order, with multiplier 1: then no column of a Jacobian is a sum. */
+  readonly plain: boolean
 }
+
+/** A turn that is this near to whole quarters (rad) is meant to be whole. */
+const WHOLE = 4 * Number.EPSILON
+const QUARTER = Math.PI / 2
 
 /** Prepares a chain for computing. Axes are divided by their norm once more, because the description keeps them rounded to 1e-12. */
 export function prepareChain(chain: Chain): PreparedChain {
-  const count = chain.motions.length
+  const { motions } = chain
+  const count = motions.length
   if (chain.constants.length !== count + 1) throw new RangeError('a chain needs one constant more than it has motions')
-  const constants = new Float64Array(TRANSFORM_SIZE * (count + 1))
+  const constants = uprightConstants(chain)
+  const steps = new Float64Array(STEP_SIZE * count)
+  const quarters = new Int32Array(count)
+  const rest = new Float64Array(count)
+  const addTurn = (motion: number, angle: number): void => {
+    const whole = Math.round(angle / QUARTER)
+    const left = angle - whole * QUARTER
+    quarters[motion]! += whole
+    if (Math.abs(left) > WHOLE) rest[motion]! += left
+  }
+  for (let i = 0; i < count; i++) {
+    // The first motion stands where its own placement puts it.
+    if (i === 0) steps[0] = 1
+    else {
+      const { first, last } = stepBetweenAxes(constants[i]!, steps, STEP_SIZE * i)
+      addTurn(i - 1, first)
+      addTurn(i, last)
+    }
+  }
+  return {
+    baseFromFirst: constants[0]!,
+    lastFromTip: count === 0 ? identityTransform() : constants[count]!,
+    steps,
+    rotary: Uint8Array.from(motions, (motion) => (motion.rotary ? 1 : 0)),
+    joint: Int32Array.from(motions, (motion) => motion.joint),
+    multiplier: Float64Array.from(motions, (motion) => motion.multiplier),
+    offset: Float64Array.from(motions, (motion) => motion.offset),
+    quarters,
+    rest,
+    plain: count === chain.joints.length && motions.every(({ joint, multiplier }, i) => joint === i && multiplier === 1),
+  }
+}
+
+/** The constants of a chain between frames whose z is each motion's axis. */
+function uprightConstants(chain: Chain): Float64Array[] {
   const frame = identityTransform()
   const frameInverse = identityTransform()
-  const turned = identityTransform()
   const axis = new Float64Array(3)
-  for (let i = 0; i <= count; i++) {
+  return chain.constants.map((constant, i) => {
+    const upright = new Float64Array(TRANSFORM_SIZE)
     invertTransform(frame, frameInverse)
-    multiplyTransforms(frameInverse, 0, chain.constants[i]!, 0, turned, 0)
+    multiplyTransforms(frameInverse, 0, constant, 0, upright, 0)
     frame.set(identityTransform())
     const motion = chain.motions[i]
     if (motion !== undefined) {
@@ -38,13 +89,7 @@ export function prepareChain(chain: Chain): PreparedChain {
       })
       axisFrame(axis, frame)
     }
-    multiplyTransforms(turned, 0, frame, 0, constants, TRANSFORM_SIZE * i)
-  }
-  return {
-    constants,
-    rotary: Uint8Array.from(chain.motions, (motion) => (motion.rotary ? 1 : 0)),
-    joint: Int32Array.from(chain.motions, (motion) => motion.joint),
-    multiplier: Float64Array.from(chain.motions, (motion) => motion.multiplier),
-    offset: Float64Array.from(chain.motions, (motion) => motion.offset),
-  }
+    multiplyTransforms(upright, 0, frame, 0, upright, 0)
+    return upright
+  })
 }

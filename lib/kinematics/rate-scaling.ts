@@ -1,4 +1,4 @@
-import type { Chain } from './chain'
+import type { RateBounds } from './rate-bounds'
 
 /** Of a limit, relative. */
 const ROUNDING = 4 * Number.EPSILON
@@ -9,82 +9,98 @@ const MOST_NUDGES = 53
 
 /** The factors of the primary and the secondary rates. */
 export interface RateScaling {
-  readonly scale: number
-  readonly secondaryScale: number
+  scale: number
+  secondaryScale: number
 }
 
-/** Of all (scale, secondaryScale) in [0, 1]² with |scale·primary + secondaryScale·secondary| <= derating·rate for each known rate,
- *  the largest scale, then the largest secondaryScale. The secondary motion may help: where it opposes the primary at the joint that
- *  binds, keeping it keeps the tool faster. A linear programme in two variables: the unit square is cut by each limit in turn. */
-export function scaleToRates(chain: Chain, primary: Float64Array, secondary: Float64Array, derating: number): RateScaling {
-  const limits = chain.joints.map(({ rate }) => (rate === null ? Number.POSITIVE_INFINITY : rate * derating))
-  if (keeps(limits, primary, secondary, 1, 1)) return { scale: 1, secondaryScale: 1 }
-
-  let corners: Corner[] = [
-    [0, 0],
-    [1, 0],
-    [1, 1],
-    [0, 1],
-  ]
-  limits.forEach((limit, i) => {
-    if (limit === Number.POSITIVE_INFINITY) return
-    corners = cut(corners, primary[i]!, secondary[i]!, limit)
-    corners = cut(corners, -primary[i]!, -secondary[i]!, limit)
-  })
-  let scale = 0
-  for (const [s] of corners) scale = Math.max(scale, s)
-  const secondaryScale = largestSecondary(limits, primary, secondary, scale)
-  return withinRounding(limits, primary, secondary, scale, secondaryScale)
+/** Of all (scale, secondaryScale) in [0, 1]² that keep scale·primary + secondaryScale·secondary within the bounds, the largest scale,
+ *  then the largest secondaryScale. The secondary motion may help: where it opposes the primary at the joint that binds, keeping it
+ *  keeps the tool faster. False, and both 0, where no pair keeps them: bounds that exclude standing still may be out of reach.
+ *  A linear programme in two variables: the unit square is cut by each bound in turn. */
+export function scaleToBounds(bounds: RateBounds, primary: Float64Array, secondary: Float64Array, out: RateScaling): boolean {
+  out.scale = 1
+  out.secondaryScale = 1
+  if (keeps(bounds, primary, secondary, 1, 1)) return true
+  const { lower, upper } = bounds
+  bounds.corners.set(UNIT_SQUARE)
+  let corners = UNIT_SQUARE.length / 2
+  for (let i = 0; i < upper.length; i++) {
+    if (upper[i]! < Number.POSITIVE_INFINITY) corners = cut(bounds, corners, primary[i]!, secondary[i]!, upper[i]!)
+    if (lower[i]! > Number.NEGATIVE_INFINITY) corners = cut(bounds, corners, -primary[i]!, -secondary[i]!, -lower[i]!)
+  }
+  out.scale = 0
+  for (let k = 0; k < corners; k++) out.scale = Math.max(out.scale, bounds.corners[2 * k]!)
+  out.secondaryScale = corners === 0 ? 0 : largestSecondary(bounds, primary, secondary, out.scale)
+  takeOffRounding(bounds, primary, secondary, out)
+  return corners > 0
 }
 
-type Corner = readonly [scale: number, secondaryScale: number]
+const UNIT_SQUARE = Float64Array.of(0, 0, 1, 0, 1, 1, 0, 1)
 
-function keeps(limits: readonly number[], primary: Float64Array, secondary: Float64Array, scale: number, secondaryScale: number): boolean {
-  return limits.every((limit, i) => Math.abs(scale * primary[i]! + secondaryScale * secondary[i]!) <= limit)
+function keeps({ lower, upper }: RateBounds, primary: Float64Array, secondary: Float64Array, scale: number, secondaryScale: number): boolean {
+  for (let i = 0; i < upper.length; i++) {
+    const rate = scale * primary[i]! + secondaryScale * secondary[i]!
+    if (!(rate <= upper[i]! && rate >= lower[i]!)) return false
+  }
+  return true
 }
 
-function withinRounding(
-  limits: readonly number[],
-  primary: Float64Array,
-  secondary: Float64Array,
-  scale: number,
-  secondaryScale: number,
-): RateScaling {
-  if (keeps(limits, primary, secondary, scale, secondaryScale)) return { scale, secondaryScale }
+function takeOffRounding(bounds: RateBounds, primary: Float64Array, secondary: Float64Array, out: RateScaling): void {
+  const { scale, secondaryScale } = out
+  if (keeps(bounds, primary, secondary, scale, secondaryScale)) return
   for (let i = 0, off = Number.EPSILON; i < NUDGES_OF_SECONDARY; i++, off *= 2) {
-    if (keeps(limits, primary, secondary, scale, secondaryScale * (1 - off))) return { scale, secondaryScale: secondaryScale * (1 - off) }
+    out.secondaryScale = secondaryScale * (1 - off)
+    if (keeps(bounds, primary, secondary, scale, out.secondaryScale)) return
   }
   for (let i = 0, off = Number.EPSILON; i < MOST_NUDGES; i++, off *= 2) {
-    const part = 1 - off
-    if (keeps(limits, primary, secondary, scale * part, secondaryScale * part))
-      return { scale: scale * part, secondaryScale: secondaryScale * part }
+    out.scale = scale * (1 - off)
+    out.secondaryScale = secondaryScale * (1 - off)
+    if (keeps(bounds, primary, secondary, out.scale, out.secondaryScale)) return
   }
-  return { scale: 0, secondaryScale: 0 }
+  // Only bounds that exclude standing still come here: the answer is as good as rounding lets it be, and whoever uses it clamps.
+  const still = keeps(bounds, primary, secondary, 0, 0)
+  out.scale = still ? 0 : scale
+  out.secondaryScale = still ? 0 : secondaryScale
 }
 
-/** The part of a convex polygon where p·scale + s·secondaryScale <= limit. Sutherland & Hodgman 1974. */
-function cut(corners: readonly Corner[], p: number, s: number, limit: number): Corner[] {
-  if (corners.every((corner) => p * corner[0] + s * corner[1] <= limit)) return [...corners]
-  const kept: Corner[] = []
-  corners.forEach((corner, k) => {
-    const next = corners[(k + 1) % corners.length]!
-    const room = limit - p * corner[0] - s * corner[1]
-    const roomNext = limit - p * next[0] - s * next[1]
-    if (room >= 0) kept.push(corner)
+/** Leaves the part of a convex polygon where p·scale + s·secondaryScale <= limit, and returns its number of corners.
+ *  Sutherland & Hodgman 1974. */
+function cut(bounds: RateBounds, corners: number, p: number, s: number, limit: number): number {
+  const { corners: from, cutCorners: to } = bounds
+  let outside = false
+  for (let k = 0; k < corners; k++) outside ||= !(p * from[2 * k]! + s * from[2 * k + 1]! <= limit)
+  if (!outside) return corners
+  let kept = 0
+  for (let k = 0; k < corners; k++) {
+    const next = k + 1 === corners ? 0 : k + 1
+    const a = from[2 * k]!, b = from[2 * k + 1]!
+    const nextA = from[2 * next]!, nextB = from[2 * next + 1]!
+    const room = limit - p * a - s * b
+    const roomNext = limit - p * nextA - s * nextB
+    if (room >= 0) {
+      to[2 * kept] = a
+      to[2 * kept + 1] = b
+      kept++
+    }
     if ((room > 0 && roomNext < 0) || (room < 0 && roomNext > 0)) {
       const part = room / (room - roomNext)
-      kept.push([corner[0] + part * (next[0] - corner[0]), corner[1] + part * (next[1] - corner[1])])
+      to[2 * kept] = a + part * (nextA - a)
+      to[2 * kept + 1] = b + part * (nextB - b)
+      kept++
     }
-  })
+  }
+  for (let k = 0; k < 2 * kept; k++) from[k] = to[k]!
   return kept
 }
 
-function largestSecondary(limits: readonly number[], primary: Float64Array, secondary: Float64Array, scale: number): number {
+function largestSecondary({ lower, upper }: RateBounds, primary: Float64Array, secondary: Float64Array, scale: number): number {
   let largest = 1
-  limits.forEach((limit, i) => {
+  for (let i = 0; i < upper.length; i++) {
     const s = secondary[i]!
+    const limit = s > 0 ? upper[i]! : -lower[i]!
     // A part that is lost in the rounding of the limit decides nothing.
-    if (Math.abs(s) > ROUNDING * limit) largest = Math.min(largest, (limit - Math.sign(s) * scale * primary[i]!) / Math.abs(s))
-  })
+    if (limit < Number.POSITIVE_INFINITY && Math.abs(s) > ROUNDING * Math.abs(limit))
+      largest = Math.min(largest, (limit - Math.sign(s) * scale * primary[i]!) / Math.abs(s))
+  }
   return Math.max(0, largest)
 }

@@ -9,13 +9,14 @@ export function seededConfigurations(chain: Chain, count: number, seed = 1): Flo
   const random = numbers(seed)
   return Array.from({ length: count }, () =>
     Float64Array.from(chain.joints, (joint) => {
-      const [from, to] = span(joint)
+      const [from, to] = rangeOf(joint)
       return from + (to - from) * random()
     }),
   )
 }
 
-function span({ type, lower, upper }: ChainJoint): [from: number, to: number] {
+/** The range of a joint; where a bound is missing, the one that seededConfigurations takes. */
+export function rangeOf({ type, lower, upper }: ChainJoint): [from: number, to: number] {
   const half = HALF_SPAN[type]
   if (lower !== null && upper !== null) return [lower, upper]
   if (lower !== null) return [lower, lower + 2 * half]

@@ -5,8 +5,8 @@ import { jacobian } from './jacobian'
 import { LINEAR_COMPONENTS, type Task } from './task'
 
 /** Fills work.taskJacobian (components x n) at the pose in `work` with the rows that the task asks for, in its frame, linear rows
- *  divided by `characteristicLength` (m; 1 leaves SI), and work.taskValues with its singular value decomposition. */
-export function taskJacobian(chain: Chain, work: Workspace, task: Task, characteristicLength = 1): Float64Array {
+ *  divided by `characteristicLength` (m; 1 leaves SI). Returns the whole Jacobian in that frame, undivided. */
+export function fillTaskJacobian(chain: Chain, work: Workspace, task: Task, characteristicLength = 1): Float64Array {
   const n = chain.joints.length
   const whole = jacobian(chain, work, task.frame)
   const { rows } = task
@@ -15,6 +15,12 @@ export function taskJacobian(chain: Chain, work: Workspace, task: Task, characte
     const divisor = row < LINEAR_COMPONENTS ? characteristicLength : 1
     for (let j = 0; j < n; j++) work.taskJacobian[k * n + j] = whole[row * n + j]! / divisor
   }
-  decompose(work.taskJacobian, rows.length, n, work.taskValues)
+  return whole
+}
+
+/** The same, and work.taskValues with its singular value decomposition. Returns work.taskJacobian. */
+export function taskJacobian(chain: Chain, work: Workspace, task: Task, characteristicLength = 1): Float64Array {
+  fillTaskJacobian(chain, work, task, characteristicLength)
+  decompose(work.taskJacobian, task.rows.length, chain.joints.length, work.taskValues)
   return work.taskJacobian
 }

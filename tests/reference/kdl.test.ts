@@ -1,4 +1,3 @@
-import { execFileSync } from 'node:child_process'
 import { readdirSync, readFileSync } from 'node:fs'
 import path from 'node:path'
 import { describe, expect, it } from 'vitest'
@@ -11,9 +10,8 @@ import { compileChain } from '@/lib/urdf/compile-chain'
 import { defaultChain } from '@/lib/urdf/default-chain'
 import type { Description } from '@/lib/urdf/description'
 import { parseUrdf } from '@/lib/urdf/parse-urdf'
+import { askPython } from './ask-python'
 
-/** Debian's python, which is the one that python3-pykdl is installed for. */
-const PYTHON = '/usr/bin/python3'
 const CONFIGURATIONS = 200
 /** Of the larger of 1 and the largest entry. */
 const TOLERANCE = 1e-12
@@ -34,8 +32,7 @@ function ask(file: string, chain: Chain, configurations: readonly ArrayLike<numb
     joints: chain.joints.map(({ name }) => name),
     configurations: configurations.map((q) => Array.from(q)),
   }
-  const answer = execFileSync(PYTHON, [path.join(here, 'kdl.py')], { input: JSON.stringify(question), maxBuffer: 256 * 1024 * 1024 })
-  return JSON.parse(answer.toString()) as Witness
+  return askPython<Witness>('kdl.py', question)
 }
 
 function expectAgreement(ours: ArrayLike<number>, theirs: readonly number[], what: string) {

@@ -139,6 +139,14 @@ export function sixAxis(): Chain {
   )
 }
 
+/** The three joints of the inverse kinematics example in the code library of Lynch & Park 2017, given by screws in tip axes: a turn, a
+ *  slide along y, and a turn that slides a tenth as far. */
+export function turnSlideScrew(): Chain {
+  const screws = screwArm([[0, 0, -1, 2, 0, 0], [1, 0, 0, 0, 0, 0], [0, 0, 1, 0, 0, 0.1]], [-1, 0, 0, 0, 0, 1, 0, 6, 0, 0, -1, 2], 'in-tip')
+  // A screw without a turn stands in the second place, which screwArm does not write.
+  return { ...screws, motions: screws.motions.map((motion) => (motion.joint === 1 ? { ...motion, rotary: false, axis: [0, 1, 0] } : motion)) }
+}
+
 /** A workspace that stands at `q`. */
 export function at(chain: Chain, q: ArrayLike<number>, tool?: ArrayLike<number>): Workspace {
   const work = createWorkspace(chain)

@@ -1,11 +1,12 @@
 import type { Chain } from '@/lib/kinematics/chain'
 import { DEFAULT_INVERSE, rankTolerance } from '@/lib/kinematics/inverse'
-import { resolveRates, type RateOutcome, type RatePolicy } from '@/lib/kinematics/resolve-rates'
+import type { Instant, RatePolicy } from '@/lib/kinematics/rate-policy'
+import { resolveRates, type RateOutcome } from '@/lib/kinematics/resolve-rates'
 import { structuralLoss, type StructuralLoss, type StructuralOptions } from '@/lib/kinematics/structural-loss'
 import { createTask, type Task } from '@/lib/kinematics/task'
 import { at } from './arms'
 
-export interface Wish extends Partial<Omit<RatePolicy, 'structural'>> {
+export interface Wish extends Partial<Omit<RatePolicy, 'structural'>>, Instant {
   readonly tool?: ArrayLike<number>
 }
 
@@ -34,7 +35,9 @@ export function askRates(chain: Chain, q: ArrayLike<number>, twist: ArrayLike<nu
   const tool = wish.tool === undefined ? {} : { tipFromTool: wish.tool }
   const structural = known(chain, task, { tolerance: rankTolerance(inverse), ...tool })
   const limits = wish.limits ?? { rates: 'scale', derating: 1 }
-  return resolveRates(chain, at(chain, q, wish.tool), twist, { task, inverse, secondary: wish.secondary ?? [], limits, structural })
+  const { jointWeights, secondary = [] } = wish
+  const policy = { task, inverse, secondary, limits, structural, ...(jointWeights === undefined ? {} : { jointWeights }) }
+  return resolveRates(chain, at(chain, q, wish.tool), twist, policy, wish)
 }
 
 /** A twist in the plane. */

@@ -90,4 +90,15 @@ describe('closedLoopTwist', () => {
     // The pose moves along arcs, not straight lines: the loop is a little off its linear model.
     expect(away() / first).toBeCloseTo(0.00592, 3)
   })
+
+  it('is warned of from gain times period 2 on, where a discrete loop no longer settles', () => {
+    const codes = (gain: number, dt?: number) =>
+      askRates(planar([1, 1]), rad(30, 60), [0, 0, 0, 0, 0, 0], { task: PLANE, gain, limits: { rates: 'scale', derating: 1, ...(dt === undefined ? {} : { dt }) } }).diagnosis
+    expect(codes(200, 0.01).map(({ code }) => code)).toEqual(['gain-too-high'])
+    expect(codes(200, 0.01)[0]!.detail).toContain('Gain 200 per second times a period of 0.0100 s is 2.00')
+    expect([codes(199, 0.01), codes(200)]).toEqual([[], []])
+    // The linear model: each period multiplies the error by 1 − gain·dt.
+    expect(Math.abs(1 - 1.99)).toBeLessThan(1)
+    expect(Math.abs(1 - 2.01)).toBeGreaterThan(1)
+  })
 })

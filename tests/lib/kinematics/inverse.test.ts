@@ -1,8 +1,10 @@
 import { describe, expect, it } from 'vitest'
-import { DEFAULT_INVERSE, rankTolerance } from '@/lib/kinematics/inverse'
+import { DEFAULT_INVERSE, fillGains, rankTolerance, type Inverse } from '@/lib/kinematics/inverse'
 import { createTask } from '@/lib/kinematics/task'
-import { arm, planar } from './arms'
+import { taskJacobian } from '@/lib/kinematics/task-jacobian'
+import { arm, at, planar } from './arms'
 import { askRates, flat, PLANE } from './ask-rates'
+import { expectClose } from './expect-close'
 
 const along = createTask(['vx'])
 
@@ -56,6 +58,42 @@ describe('the truncated inverse', () => {
     const { rank, rates } = askRates(planar([1, 1]), [0.7, 0], flat(1, 1), { task: PLANE, inverse: { method: 'truncated', tolerance: 0 } })
     expect(rank).toBe(1)
     expect(Math.max(...rates.map(Math.abs))).toBeLessThan(1)
+  })
+})
+
+describe('the filtered inverse (Maciejewski & Klein 1988, from memory)', () => {
+  it('damps only the direction that vanishes (METHODS 8)', () => {
+    const chain = planar([1, 1])
+    const task = PLANE
+    const inverse = { method: 'filtered', threshold: 0.02, damping: 0.1 } as const
+    const none = { method: 'truncated', tolerance: 1e-9 } as const
+    const { singularValues } = askRates(chain, [0.3, 0.01], flat(0, 0), { task, inverse })
+    // The gain of a direction is the norm of the rates for a unit of it; the directions are those of the undamped answers.
+    const along = (angle: number) => flat(Math.cos(angle), Math.sin(angle))
+    const gain = (angle: number, how: Inverse) => Math.sqrt(askRates(chain, [0.3, 0.01], along(angle), { task, inverse: how }).primaryRates.reduce((sum, rate) => sum + rate * rate, 0))
+    const angles = Array.from({ length: 20_001 }, (_unused, i) => (Math.PI * i) / 20_000)
+    const vanishing = angles.reduce((best, angle) => (gain(angle, none) > gain(best, none) ? angle : best))
+    expect(1 / singularValues[0]!).toBeCloseTo(0.447218962, 9)
+    expect(gain(vanishing + Math.PI / 2, inverse)).toBeCloseTo(0.447218962, 4)
+    expect(gain(vanishing, inverse)).toBeCloseTo(0.446318879, 4)
+    expect(singularValues[1]! / (singularValues[1]! ** 2 + 0.01)).toBeCloseTo(0.446318879, 9)
+  })
+
+  it('gives the gains of METHODS 8 to the last digit printed', () => {
+    const chain = planar([1, 1])
+    const work = at(chain, [0.3, 0.01])
+    taskJacobian(chain, work, PLANE)
+    expect(fillGains(work, 2, 2, 2, { method: 'filtered', threshold: 0.02, damping: 0.1 })).toBe(0.1)
+    expectClose(Array.from(work.gains.subarray(0, 2)), [0.447218962, 0.446318879], 1e-9)
+  })
+
+  it('fades to nothing at its threshold, so that the rates do not jump there', () => {
+    const gain = (sigma: number) => askRates(slider(sigma), [0.3], flat(1, 0), { task: along, inverse: { method: 'filtered', threshold: 0.1, damping: 0.2 } })
+    expect(gain(0.1)).toMatchObject({ damping: 0 })
+    expect(gain(0.1 - 1e-9).primaryRates[0]).toBeCloseTo(10, 4)
+    expect(gain(0.05).damping).toBeCloseTo(0.2, 15)
+    expect(gain(0.01).damping).toBe(0.2)
+    expect(gain(0).primaryRates[0]).toBe(0)
   })
 })
 

@@ -1,6 +1,6 @@
 import { SingularValueDecomposition } from 'ml-matrix'
 import { describe, expect, it } from 'vitest'
-import { measures } from '@/lib/kinematics/measures'
+import { measures, partMeasures } from '@/lib/kinematics/measures'
 import { createTask } from '@/lib/kinematics/task'
 import { arm, at, golden, GOLDEN_POSE, planar, rad, randomArm, randomPose } from './arms'
 import { expectClose } from './expect-close'
@@ -90,5 +90,29 @@ describe('measures', () => {
       singularValues: [0],
       conditionNumber: null,
     })
+  })
+})
+
+describe('partMeasures', () => {
+  it('gives the singular values of the linear and the angular rows, each by itself', () => {
+    const chain = golden()
+    const work = at(chain, GOLDEN_POSE)
+    for (const frame of ['base', 'tip'] as const) {
+      const { translational, rotational } = partMeasures(chain, work, createTask(undefined, frame))
+      const witness = (components: readonly ['vx', 'vy', 'vz'] | readonly ['wx', 'wy', 'wz']) => {
+        measures(chain, work, createTask(components))
+        return new SingularValueDecomposition([0, 1, 2].map((k) => Array.from(work.taskJacobian.subarray(7 * k, 7 * k + 7))), { autoTranspose: true }).diagonal
+      }
+      expectClose(translational, witness(['vx', 'vy', 'vz']), 1e-14)
+      expectClose(rotational, witness(['wx', 'wy', 'wz']), 1e-14)
+    }
+  })
+
+  it('leaves a part empty that the task does not have', () => {
+    const chain = planar([1, 1])
+    const { translational, rotational } = partMeasures(chain, at(chain, rad(30, 60)), plane)
+    expect(translational).toHaveLength(2)
+    expect(rotational).toEqual([])
+    expect(partMeasures(chain, at(chain, [0, 0]), createTask(['wz'])).translational).toEqual([])
   })
 })

@@ -263,3 +263,54 @@ describe('nullSpace', () => {
     expect(ask(chain, randomPose(chain, 3), createTask())).toEqual(ask(chain, randomPose(chain, 3), createTask()))
   })
 })
+
+describe('alignTo', () => {
+  const chain = golden()
+  const task = createTask(['vx', 'vy', 'vz'])
+  const known = structuralLoss(chain, task)
+  const pose = (i: number) => GOLDEN_POSE.map((value, k) => value + 0.8 * Math.sin(0.01 * i + k))
+
+  it('keeps a basis of four directions continuous along a path on which the canonical one jumps', () => {
+    const step = (a: number[][], b: number[][]) => Math.max(...a.flatMap((row, i) => row.map((part, k) => Math.abs(part - b[i]![k]!))))
+    let [aligned, canonical] = [nullSpace(chain, at(chain, pose(0)), task, known).basis, nullSpace(chain, at(chain, pose(0)), task, known).basis]
+    let [worst, jump] = [0, 0]
+    for (let i = 1; i <= 700; i++) {
+      const work = at(chain, pose(i))
+      const next = nullSpace(chain, work, task, known, { alignTo: aligned }).basis
+      const plain = nullSpace(chain, work, task, known).basis
+      worst = Math.max(worst, step(next, aligned))
+      jump = Math.max(jump, step(plain, canonical))
+      ;[aligned, canonical] = [next, plain]
+    }
+    expect(jump).toBeGreaterThan(0.5)
+    expect(worst).toBeLessThan(0.05)
+  })
+
+  it('changes neither the space nor the projector', () => {
+    const work = at(chain, pose(5))
+    const plain = nullSpace(chain, work, task, known, { withProjector: true })
+    const turned = nullSpace(chain, work, task, known, { withProjector: true, alignTo: nullSpace(chain, at(chain, pose(90)), task, known).basis })
+    expect(turned.projector).toEqual(plain.projector)
+    turned.basis.forEach((row, i) =>
+      turned.basis.forEach((other, j) => expect(row.reduce((sum, part, k) => sum + part * other[k]!, 0)).toBeCloseTo(plain.projector![i]![j]!, 13)),
+    )
+  })
+
+  it('goes through a singular pose, where a direction comes and goes', () => {
+    const arm3 = planar([1, 1, 1])
+    const loss = structuralLoss(arm3, plane)
+    let basis = nullSpace(arm3, at(arm3, [0.3, 0.2, 0.2]), plane, loss).basis
+    const widths = [[0, 0, 0], [0.1, -0.2, 0.3]].map((q) => {
+      basis = nullSpace(arm3, at(arm3, q), plane, loss, { alignTo: basis }).basis
+      return basis[0]!.length
+    })
+    expect(widths).toEqual([2, 1])
+  })
+
+  it('refuses a basis of another shape', () => {
+    const work = at(chain, GOLDEN_POSE)
+    for (const alignTo of [[[1]], [[1], [1], [1], [1], [1], [1], [1, 2]]]) {
+      expect(() => nullSpace(chain, work, task, known, { alignTo })).toThrow('a basis to align to needs 7 rows of equal length')
+    }
+  })
+})

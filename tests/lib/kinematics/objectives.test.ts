@@ -1,12 +1,13 @@
 import { describe, it } from 'vitest'
 import type { Chain } from '@/lib/kinematics/chain'
 import { fillWish, type Objective } from '@/lib/kinematics/objectives'
-import { arm, planar, rad } from './arms'
+import { createTask } from '@/lib/kinematics/task'
+import { arm, at, planar, rad } from './arms'
 import { expectClose } from './expect-close'
 
 function wish(chain: Chain, q: readonly number[], ...objectives: Objective[]): number[] {
   const out = new Float64Array(q.length)
-  fillWish(chain, q, objectives, out)
+  fillWish(at(chain, q), createTask(), 0, objectives, out)
   return Array.from(out)
 }
 

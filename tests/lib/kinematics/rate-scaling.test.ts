@@ -1,7 +1,8 @@
 import fc from 'fast-check'
 import { describe, expect, it } from 'vitest'
 import type { Chain } from '@/lib/kinematics/chain'
-import { scaleToRates } from '@/lib/kinematics/rate-scaling'
+import { createRateBounds, fillRateBounds } from '@/lib/kinematics/rate-bounds'
+import { scaleToBounds } from '@/lib/kinematics/rate-scaling'
 import { planar } from './arms'
 
 /** A chain of which only the rate limits matter. */
@@ -11,14 +12,19 @@ function limited(rates: readonly (number | null)[]): Chain {
 }
 
 function scaled(rates: readonly (number | null)[], primary: readonly number[], secondary: readonly number[], derating = 1) {
-  return scaleToRates(limited(rates), Float64Array.from(primary), Float64Array.from(secondary), derating)
+  const bounds = createRateBounds(rates.length)
+  const { joints } = limited(rates)
+  fillRateBounds(bounds, joints, joints.map(() => 0), { rates: 'scale', derating })
+  const out = { scale: Number.NaN, secondaryScale: Number.NaN }
+  expect(scaleToBounds(bounds, Float64Array.from(primary), Float64Array.from(secondary), out)).toBe(true)
+  return out
 }
 
 function keeps(rates: readonly (number | null)[], primary: readonly number[], secondary: readonly number[], a: number, b: number): boolean {
   return rates.every((rate, i) => rate === null || Math.abs(a * primary[i]! + b * secondary[i]!) <= rate)
 }
 
-describe('scaleToRates', () => {
+describe('scaleToBounds', () => {
   it('changes nothing that is within the limits, however close', () => {
     expect(scaled([1, 2], [0.5, -1.5], [0.5, -0.5])).toEqual({ scale: 1, secondaryScale: 1 })
   })

@@ -1,0 +1,69 @@
+import { dot } from './dot'
+
+/** A row that keeps less than this part of its square when the rows before are taken out is cleaned once more: what rounding left in
+ *  it has grown against it. Daniel, Gragg, Kaufman & Stewart 1976. */
+const CLEANED_AGAIN = 0.5
+
+/** A = L·Q of the row-major m x n matrix `a`, m <= n, by Gram-Schmidt on its rows: `rows` (m x n) receives the orthonormal rows of Q,
+ *  `lower` (m x m) the lower triangle of L, diagonal above 0. False, and unfinished, where a row lies wholly in those before. */
+export function factorRows(a: Float64Array, m: number, n: number, rows: Float64Array, lower: Float64Array): boolean {
+  for (let k = 0; k < m; k++) {
+    const at = k * n
+    let before = 0
+    for (let j = 0; j < n; j++) {
+      const entry = a[at + j]!
+      rows[at + j] = entry
+      before += entry * entry
+    }
+    for (let i = 0; i < k; i++) lower[k * m + i] = 0
+    let after = takeOut(rows, at, k, n, lower, k * m)
+    if (after < CLEANED_AGAIN * before) {
+      before = after
+      after = takeOut(rows, at, k, n, lower, k * m)
+      if (!(after >= CLEANED_AGAIN * before)) return false
+    }
+    const length = Math.sqrt(after)
+    if (!(length > 0)) return false
+    lower[k * m + k] = length
+    const inverse = 1 / length
+    for (let j = 0; j < n; j++) rows[at + j]! *= inverse
+  }
+  return true
+}
+
+/** Takes the first k rows out of the one at `at`, adds their parts to `lower` and returns the square of what is left. */
+function takeOut(rows: Float64Array, at: number, k: number, n: number, lower: Float64Array, atLower: number): number {
+  for (let i = 0; i < k; i++) {
+    let along = 0
+    for (let j = 0; j < n; j++) along += rows[at + j]! * rows[i * n + j]!
+    for (let j = 0; j < n; j++) rows[at + j]! -= along * rows[i * n + j]!
+    lower[atLower + i]! += along
+  }
+  return dot(rows, at, rows, at, n)
+}
+
+/** x of L·x = b for a lower triangle (m x m); `x` may be `b`. */
+export function solveLower(lower: Float64Array, m: number, b: Float64Array, x: Float64Array): void {
+  for (let i = 0; i < m; i++) {
+    let sum = b[i]!
+    for (let k = 0; k < i; k++) sum -= lower[i * m + k]! * x[k]!
+    x[i] = sum / lower[i * m + i]!
+  }
+}
+
+/** At most the smallest singular value of a lower triangle (m x m), and at least a part 1/√m of it: one over the Frobenius norm of its
+ *  inverse. */
+export function leastSingularValue(lower: Float64Array, m: number, scratch: Float64Array): number {
+  let squares = 0
+  // Columns of the inverse one after the other, in the rows of scratch.
+  for (let c = 0; c < m; c++) {
+    for (let i = c; i < m; i++) {
+      let sum = i === c ? 1 : 0
+      for (let k = c; k < i; k++) sum -= lower[i * m + k]! * scratch[k]!
+      const entry = sum / lower[i * m + i]!
+      scratch[i] = entry
+      squares += entry * entry
+    }
+  }
+  return 1 / Math.sqrt(squares)
+}
