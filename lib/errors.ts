@@ -163,6 +163,12 @@ export const PROBLEMS = {
     meaning: 'The link named in "links" also depends on a joint that is not in chain.joints, so its pose does not follow from the configuration.',
     remedy: 'Leave the link out, or choose a chain that contains the joint.',
   },
+  'budget-exceeded': {
+    status: 422,
+    title: 'It takes too long',
+    meaning: 'The request needed more than 10 seconds of computing and was given up. Nothing of it is answered.',
+    remedy: 'Send fewer targets at once, give seeds near the answers, allow fewer attempts, or relax the tolerances.',
+  },
   'import-refused': {
     status: 422,
     title: 'The file cannot be imported',

@@ -29,6 +29,7 @@ export const PERMISSIONS = {
   jacobian: { role: 'reader', scope: 'compute' },
   nullSpace: { role: 'reader', scope: 'compute' },
   jointRates: { role: 'reader', scope: 'compute' },
+  inverseKinematics: { role: 'reader', scope: 'compute' },
   listKeys: { role: 'administrator', scope: null },
   createKey: { role: 'administrator', scope: null },
   getKey: { role: 'administrator', scope: null },

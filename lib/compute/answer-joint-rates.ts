@@ -1,19 +1,21 @@
 import type { z } from 'zod'
 import type { UseCase } from '@/lib/access/use-case'
 import type { JointRatesResult } from '@/lib/contract/kinematic-answers'
-import type { Inverse as InverseQuestion, Secondary } from '@/lib/contract/kinematic-quantities'
+import type { Inverse as InverseQuestion } from '@/lib/contract/kinematic-quantities'
 import { JOINT_RATES_FIELDS, type JointRatesQuestion } from '@/lib/contract/kinematic-questions'
 import { finishInSlices, inSlices } from '@/lib/in-slices'
 import { closedLoopTwist, type Reference } from '@/lib/kinematics/closed-loop-twist'
 import { forwardKinematics } from '@/lib/kinematics/forward-kinematics'
 import { DEFAULT_INVERSE, type Inverse, rankTolerance } from '@/lib/kinematics/inverse'
 import { RANK_TOLERANCE } from '@/lib/kinematics/measures'
-import type { Objective } from '@/lib/kinematics/objectives'
+import type { RateLimits } from '@/lib/kinematics/rate-bounds'
+import type { RatePolicy } from '@/lib/kinematics/rate-policy'
 import { resolveRates } from '@/lib/kinematics/resolve-rates'
 import { structuralLossInSteps } from '@/lib/kinematics/structural-loss'
 import { begin, type Begun, checkAnswerSize, readPose, taskOf } from './begin'
 import { includedFields, pick } from './included'
-import { type SiReader, TWIST_KINDS } from './si'
+import { readObjectives } from './read-objectives'
+import { type Kind, type SiReader, TWIST_KINDS } from './si'
 
 const DEFAULT_GAIN = 1
 const DEFAULT_ADAPTIVE = { threshold: 0.02, maxDamping: 0.05 }
@@ -32,16 +34,10 @@ function readInverse(question: InverseQuestion | undefined, read: SiReader): Inv
         threshold: si(question.threshold ?? DEFAULT_ADAPTIVE.threshold, 'threshold'),
         maxDamping: si(question.maxDamping ?? DEFAULT_ADAPTIVE.maxDamping, 'maxDamping'),
       }
+    case 'filtered':
+      return { method: 'filtered', threshold: si(question.threshold, 'threshold'), damping: si(question.damping, 'damping') }
   }
 }
-
-const readObjectives = (secondary: readonly Secondary[] | undefined, { read, kinds }: Begun): Objective[] =>
-  (secondary ?? []).map((objective, i) => {
-    const pointer = `/secondary/${i}`
-    const gain = read.number(objective.gain, null, `${pointer}/gain`)
-    if (objective.objective === 'mid-range') return { objective: 'mid-range', gain }
-    return { objective: 'posture', gain, posture: read.list(objective.posture, kinds, `${pointer}/posture`, 'the chain') }
-  })
 
 const readTwist = (read: SiReader, twist: readonly number[], pointer: string) => read.list(twist, TWIST_KINDS, pointer, 'a twist')
 
@@ -54,6 +50,19 @@ function readReference(read: SiReader, reference: NonNullable<JointRatesQuestion
     orientationGain: gain('orientation'),
   }
 }
+
+/** Accelerations convert as their joint's rate does; null stays unknown. */
+const readAccelerations = (read: SiReader, accelerations: readonly (number | null)[], kinds: readonly Kind[]): (number | null)[] => {
+  const si = read.list(accelerations.map((value) => value ?? 0), kinds, '/limits/accelerations', 'the chain')
+  return si.map((value, i) => (accelerations[i] === null ? null : value))
+}
+
+const readLimits = (limits: JointRatesQuestion['limits'], { read, kinds }: Begun): RateLimits => ({
+  rates: limits?.rates ?? 'scale',
+  derating: limits?.derating ?? 1,
+  ...(limits?.accelerations && { accelerations: readAccelerations(read, limits.accelerations, kinds) }),
+  ...(limits?.dt !== undefined && { dt: limits.dt }),
+})
 
 /** The n-th of a list that has one entry for each configuration, or one for all. */
 const nth = <T>(list: readonly T[], index: number): T => list[list.length === 1 ? 0 : index]!
@@ -72,6 +81,10 @@ export const answerJointRates: UseCase<'jointRates'> = async (caller, { at, body
   const task = taskOf(body.task)
   const inverse = readInverse(body.inverse, read)
   const secondary = readObjectives(body.secondary, begun)
+  const limits = readLimits(body.limits, begun)
+  const jointWeights = body.jointWeights && read.list(body.jointWeights, kinds.map(() => null), '/jointWeights', 'the chain')
+  const previous = body.limits?.previousRates?.map((rates, i) => read.list(rates, kinds, `/limits/previousRates/${i}`, 'the chain'))
+  if (previous !== undefined) read.matched(previous.length, count, '/limits/previousRates')
   const twists = body.twists?.map((twist, i) => readTwist(read, twist, `/twists/${i}`)) ?? []
   const references = body.references?.map((reference, i) => readReference(read, reference, `/references/${i}`)) ?? []
   if (body.twists !== undefined) read.matched(twists.length, count, '/twists')
@@ -81,18 +94,23 @@ export const answerJointRates: UseCase<'jointRates'> = async (caller, { at, body
   const numbersAJoint = RATE_FIELDS.filter((field) => wanted.has(field)).length + (wanted.has('diagnosis') ? NUMBERS_A_JOINT_DIAGNOSED : 0)
   checkAnswerSize(count, NUMBERS_BESIDE_JOINTS + numbersAJoint * kinds.length)
 
-  const policy = {
+  const policy: RatePolicy = {
     task,
     inverse,
     secondary,
-    limits: { rates: body.limits?.rates ?? ('scale' as const), derating: body.limits?.derating ?? 1 },
+    limits,
+    ...(jointWeights && { jointWeights }),
     structural: await finishInSlices(structuralLossInSteps(chain, task, { tolerance: rankTolerance(inverse), ...(tipFromTool && { tipFromTool }) })),
   }
   const results: z.infer<typeof JointRatesResult>[] = []
   await inSlices(count, (index) => {
     forwardKinematics(chain, configurations[index]!, work, tipFromTool)
     const twist = body.references === undefined ? nth(twists, index) : closedLoopTwist(work, nth(references, index), task.frame)
-    const outcome = resolveRates(chain, work, twist, policy)
+    const reference = body.references && nth(references, index)
+    const outcome = resolveRates(chain, work, twist, policy, {
+      ...(previous && { previousRates: nth(previous, index) }),
+      ...(reference && { gain: Math.max(reference.positionGain, reference.orientationGain) }),
+    })
     results.push(
       pick<z.infer<typeof JointRatesResult>>(wanted, {
         rates: () => write.list(outcome.rates, kinds),
@@ -106,7 +124,7 @@ export const answerJointRates: UseCase<'jointRates'> = async (caller, { at, body
         rank: () => outcome.rank,
         nullity: () => outcome.nullity,
         damping: () => outcome.damping,
-        saturated: () => [],
+        saturated: () => outcome.saturated,
         manipulability: () => outcome.manipulability,
         toolSpeed: () => write.number(outcome.toolSpeed, 'length'),
         diagnosis: () =>

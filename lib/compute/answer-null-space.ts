@@ -9,16 +9,29 @@ import { nullSpace } from '@/lib/kinematics/null-space'
 import { structuralLossInSteps } from '@/lib/kinematics/structural-loss'
 import { begin, checkAnswerSize, taskOf } from './begin'
 import { includedFields, pick } from './included'
+import type { SiReader } from './si'
 
 /** A lost direction has 6 numbers, and at most 6 are lost. */
 const NUMBERS_BESIDE = 6 + 6 * 6
 
+/** Checks that a basis is n rows of the same length; its columns need not be orthonormal. */
+function readBasis(read: SiReader, basis: readonly (readonly number[])[], n: number): void {
+  if (basis.length !== n) read.mismatch('/alignTo', `has ${basis.length} rows; the chain has ${n} joints`)
+  const width = basis[0]?.length ?? 0
+  basis.forEach((row, i) => {
+    if (row.length !== width) read.mismatch(`/alignTo/${i}`, `has ${row.length} entries; the first row has ${width}`)
+    row.forEach((value, k) => read.number(value, null, `/alignTo/${i}`, k))
+  })
+}
+
 /** The joint rates that leave a task untouched, and the directions that are lost, at each configuration. */
 export const answerNullSpace: UseCase<'nullSpace'> = async (caller, { at, body }) => {
   const { chain, work, configurations, tipFromTool, characteristicLength, read, envelope } = await begin(caller, at, body)
+  const n = chain.joints.length
+  const { alignTo } = body
+  if (alignTo !== undefined) readBasis(read, alignTo, n)
   read.finish()
   const task = taskOf(body.task)
-  const n = chain.joints.length
   const wanted = includedFields(NULL_SPACE_FIELDS, body.include, ['projector'])
   const withProjector = wanted.has('projector')
   const withBasis = wanted.has('basis')
@@ -26,10 +39,17 @@ export const answerNullSpace: UseCase<'nullSpace'> = async (caller, { at, body }
   const options = { characteristicLength, tolerance: body.tolerance ?? RANK_TOLERANCE }
   const structural = await finishInSlices(structuralLossInSteps(chain, task, { ...options, ...(tipFromTool && { tipFromTool }) }))
 
+  let before = alignTo
   const results: z.infer<typeof NullSpaceResult>[] = []
   await inSlices(configurations.length, (index) => {
     forwardKinematics(chain, configurations[index]!, work, tipFromTool)
-    const space = nullSpace(chain, work, task, structural, { ...options, withProjector, withBasis })
+    const space = nullSpace(chain, work, task, structural, {
+      ...options,
+      withProjector,
+      withBasis: withBasis || before !== undefined,
+      ...(before && { alignTo: before }),
+    })
+    if (before !== undefined) before = space.basis
     results.push(
       pick<z.infer<typeof NullSpaceResult>>(wanted, {
         rank: () => space.rank,

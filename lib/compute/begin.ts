@@ -14,7 +14,7 @@ import { chainOf, loadRevision } from './load-chain'
 import { fullUnits, jointKinds, type Kind, POSITION_KINDS, SiReader, SiWriter } from './si'
 import { touchingFindings } from './touching-findings'
 
-type CommonQuestion = Pick<ForwardKinematicsQuestion, 'chain' | 'units' | 'tool' | 'characteristicLength' | 'configurations' | 'matrices'>
+type CommonQuestion = Pick<ForwardKinematicsQuestion, 'chain' | 'units' | 'tool' | 'characteristicLength'> & Partial<Pick<ForwardKinematicsQuestion, 'configurations'>>
 
 /** What every kinematics question starts from, in SI. */
 export interface Begun {
@@ -49,8 +49,9 @@ export async function begin(caller: Caller, at: Pick<Located, 'model' | 'revisio
   const kinds = jointKinds(chain)
   const characteristicLength = read.number(question.characteristicLength ?? 1, null, '/characteristicLength')
   const configurations: number[][] = []
-  await inSlices(question.configurations.length, (i) => {
-    configurations.push(read.list(question.configurations[i]!, kinds, `/configurations/${i}`, 'the chain'))
+  const asked = question.configurations ?? []
+  await inSlices(asked.length, (i) => {
+    configurations.push(read.list(asked[i]!, kinds, `/configurations/${i}`, 'the chain'))
   })
   const warnings = touchingFindings(revision.description, revision.findings, chain.base, chain.tip)
   return {

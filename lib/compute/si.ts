@@ -53,6 +53,11 @@ export class SiReader {
     return si
   }
 
+  /** Something else has the wrong length. */
+  mismatch(pointer: string, detail: string): void {
+    this.lengths.push({ pointer, detail })
+  }
+
   /** A list that has one entry for each configuration, or one for all. */
   matched(count: number, configurations: number, pointer: string): void {
     if (count !== 1 && count !== configurations) {

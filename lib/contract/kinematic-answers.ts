@@ -54,6 +54,7 @@ export const NullSpaceResult = z.strictObject({
 
 export const DIAGNOSIS_CODES = [
   'direction-lost', 'near-singular', 'rate-limited', 'secondary-starved', 'at-limit', 'outside-limits',
+  'gain-too-high',
 ] as const
 
 export const JointRatesResult = z.strictObject({
@@ -83,9 +84,20 @@ export const JointRatesResult = z.strictObject({
     .optional(),
 })
 
+export const InverseKinematicsResult = z.strictObject({
+  converged: z.boolean().optional(),
+  configuration: Values.optional().meta({ description: 'Within the joint limits; the best that was found where none reaches the target.' }),
+  positionError: z.number().optional().meta({ description: 'Of the components that count.' }),
+  orientationError: z.number().optional(),
+  iterations: z.int().optional().meta({ description: 'Over all attempts.' }),
+  attempts: z.int().optional(),
+  reason: z.enum(['unreachable', 'at-limits', 'stalled']).optional().meta({ description: 'Left out where it converged.' }),
+})
+
 const answerOf = <T extends z.ZodType>(item: T) => z.strictObject({ ...envelope, results: z.array(item) })
 
 export const ForwardKinematicsAnswer = answerOf(ForwardKinematicsResult).meta({ id: 'ForwardKinematicsAnswer' })
 export const JacobianAnswer = answerOf(JacobianResult).meta({ id: 'JacobianAnswer' })
 export const NullSpaceAnswer = answerOf(NullSpaceResult).meta({ id: 'NullSpaceAnswer' })
 export const JointRatesAnswer = answerOf(JointRatesResult).meta({ id: 'JointRatesAnswer' })
+export const InverseKinematicsAnswer = answerOf(InverseKinematicsResult).meta({ id: 'InverseKinematicsAnswer' })

@@ -1,6 +1,8 @@
 import {
   ForwardKinematicsAnswer,
   ForwardKinematicsResult,
+  InverseKinematicsAnswer,
+  InverseKinematicsResult,
   JacobianAnswer,
   JacobianResult,
   JointRatesAnswer,
@@ -8,7 +10,7 @@ import {
   NullSpaceAnswer,
   NullSpaceResult,
 } from './kinematic-answers'
-import { ForwardKinematicsQuestion, JacobianQuestion, JointRatesQuestion, NullSpaceQuestion } from './kinematic-questions'
+import { ForwardKinematicsQuestion, InverseKinematicsQuestion, JacobianQuestion, JointRatesQuestion, NullSpaceQuestion } from './kinematic-questions'
 import { operation } from './operation'
 
 const REVISION = '/teams/{team}/models/{model}/revisions/{revision}'
@@ -76,6 +78,25 @@ export const KINEMATIC_OPERATIONS = {
       configurations: [ELBOW_UP],
       twists: [[50, 0, 0, 0, 0, 0]],
       secondary: [{ objective: 'posture', posture: [0, -35, 20, 70, 0, 45, 0], gain: 0.5 }],
+    },
+  }),
+  inverseKinematics: operation({
+    method: 'POST',
+    path: `${REVISION}/inverse-kinematics`,
+    tag: 'Kinematics',
+    summary: 'Joint values that put the tool there',
+    description:
+      'A configuration within the joint limits for each target, or the best that was found and why no better. ' +
+      'Not converging is an answer, not an error. Check every motion between configurations before using it.',
+    body: InverseKinematicsQuestion,
+    answer: { status: 200, schema: InverseKinematicsAnswer },
+    item: InverseKinematicsResult,
+    errors: [...errors, 'budget-exceeded'],
+    pinned: true,
+    example: {
+      units: SHOP_UNITS,
+      targets: [{ position: [-400, 0, 500], quaternion: [0, -0.70710678, 0, 0.70710678] }],
+      seeds: [ELBOW_UP],
     },
   }),
 } as const

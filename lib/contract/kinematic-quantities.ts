@@ -66,6 +66,7 @@ export const Inverse = z
     z.strictObject({ method: z.literal('truncated'), tolerance: positive.max(1, 'at most 1: it is relative to the largest singular value').optional() }),
     z.strictObject({ method: z.literal('damped'), damping: nonNegative }),
     z.strictObject({ method: z.literal('adaptive-damped'), threshold: positive.optional(), maxDamping: positive.optional() }),
+    z.strictObject({ method: z.literal('filtered'), threshold: positive, damping: nonNegative }),
   ])
   .meta({ id: 'Inverse', description: 'adaptive-damped with threshold 0.02 and maxDamping 0.05 when left out; all SI.' })
 export type Inverse = z.infer<typeof Inverse>
@@ -78,6 +79,7 @@ export const Secondary = z
       gain: nonNegative.meta({ description: '1/s' }),
     }),
     z.strictObject({ objective: z.literal('mid-range'), gain: nonNegative }),
+    z.strictObject({ objective: z.literal('manipulability'), gain: nonNegative }),
   ])
   .meta({ id: 'Secondary' })
 export type Secondary = z.infer<typeof Secondary>

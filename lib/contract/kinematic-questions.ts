@@ -46,6 +46,8 @@ export const JOINT_RATES_FIELDS = [
   'rank', 'nullity', 'damping', 'saturated', 'manipulability', 'toolSpeed', 'diagnosis',
 ] as const
 
+export const INVERSE_KINEMATICS_FIELDS = ['converged', 'configuration', 'positionError', 'orientationError', 'iterations', 'attempts', 'reason'] as const
+
 export const ForwardKinematicsQuestion = z.strictObject({
   ...common,
   links: z.array(z.string()).max(500).optional().meta({ description: 'Links wanted besides the tip.' }),
@@ -63,6 +65,10 @@ export const NullSpaceQuestion = z.strictObject({
   ...common,
   task: Task.optional(),
   tolerance: z.number().gt(0).max(1).optional().meta({ description: 'Relative to the largest singular value; 1e-9 when left out.' }),
+  alignTo: z
+    .array(z.array(z.number()))
+    .optional()
+    .meta({ description: 'A basis (n x k) that the first result is turned to; each further result is turned to the one before.' }),
   include: include(NULL_SPACE_FIELDS),
 })
 
@@ -79,22 +85,75 @@ export const JointRatesQuestion = z
       .optional()
       .meta({ description: 'Closed loop: pose in the base link, feed-forward twist in task.frame.' }),
     inverse: Inverse.optional(),
+    jointWeights: z
+      .array(z.number().min(1e-12, 'must be at least 1e-12').max(1e12, 'at most 1e12'))
+      .optional()
+      .meta({ description: 'What a unit of each rate costs, squared; SI. The projector is then I − J_W⁺J.' }),
     secondary: z.array(Secondary).max(16).optional().meta({ description: 'What spare freedom is spent on; gains add up.' }),
     limits: z
       .strictObject({
-        rates: z.enum(['scale', 'report']).optional(),
+        rates: z.enum(['scale', 'saturate', 'report']).optional(),
         derating: z.number().gt(0, 'must be greater than 0').max(1, 'at most 1').optional(),
+        accelerations: z
+          .array(z.number().gt(0, 'must be greater than 0').nullable())
+          .optional()
+          .meta({ description: 'One for each joint; null where unknown. Needs dt.' }),
+        previousRates: z
+          .array(z.array(z.number()))
+          .min(1)
+          .max(MOST_CONFIGURATIONS)
+          .optional()
+          .meta({ description: 'The rates commanded a period ago: one entry for each configuration, or one for all. Needs accelerations.' }),
+        dt: z.number().min(1e-6, 'must be at least 1e-6').max(1000, 'at most 1000').optional().meta({ description: 'The period, s.' }),
       })
       .optional()
-      .meta({ description: 'scale (the default) keeps every known rate limit; report changes nothing.' }),
+      .meta({
+        description:
+          'scale (the default) keeps every known limit by slowing down; saturate lets other joints take over first; report changes nothing.',
+      }),
     include: include(JOINT_RATES_FIELDS),
   })
   .superRefine((question, context) => {
     if ((question.twists === undefined) === (question.references === undefined)) {
       context.addIssue({ code: 'custom', path: [], message: 'send exactly one of "twists" and "references"' })
     }
+    const { accelerations, previousRates, dt } = question.limits ?? {}
+    if (accelerations !== undefined && dt === undefined) {
+      context.addIssue({ code: 'custom', path: ['limits', 'dt'], message: 'is missing: acceleration limits need the period' })
+    }
+    if (previousRates !== undefined && accelerations === undefined) {
+      context.addIssue({ code: 'custom', path: ['limits', 'accelerations'], message: 'is missing: previous rates do nothing without acceleration limits' })
+    }
   })
 
+export const MOST_ATTEMPTS = 64
+
+const tolerance = z.number().gt(0, 'must be greater than 0')
+
+const { configurations: _configurations, ...withoutConfigurations } = common
+
+export const InverseKinematicsQuestion = z.strictObject({
+  ...withoutConfigurations,
+  targets: z
+    .array(PoseQuestion)
+    .min(1, 'send at least one target')
+    .max(MOST_CONFIGURATIONS, `at most ${MOST_CONFIGURATIONS} targets at once`)
+    .meta({ description: 'Poses of the tool in the base link.' }),
+  seeds: z
+    .array(z.array(z.number()))
+    .min(1)
+    .max(MOST_CONFIGURATIONS)
+    .optional()
+    .meta({ description: 'Where each search starts: one for each target, or one for all; the middle of the ranges when left out.' }),
+  task: Task.optional(),
+  positionTolerance: tolerance.optional().meta({ description: 'In the length unit; 1e-6 m when left out.' }),
+  orientationTolerance: tolerance.optional().meta({ description: 'In the angle unit; 1e-6 rad when left out.' }),
+  attempts: z.int().min(1).max(MOST_ATTEMPTS).optional().meta({ description: 'Starting points tried at the most; 8 when left out.' }),
+  secondary: z.array(Secondary).max(16).optional().meta({ description: 'What spare freedom is spent on once the pose is reached.' }),
+  include: include(INVERSE_KINEMATICS_FIELDS),
+})
+
+export type InverseKinematicsQuestion = z.infer<typeof InverseKinematicsQuestion>
 export type ForwardKinematicsQuestion = z.infer<typeof ForwardKinematicsQuestion>
 export type JacobianQuestion = z.infer<typeof JacobianQuestion>
 export type NullSpaceQuestion = z.infer<typeof NullSpaceQuestion>
