@@ -12,6 +12,6 @@ const config = [
       '@typescript-eslint/consistent-type-imports': 'error',
     },
   },
-  { files: ['lib/log.ts', 'scripts/**'], rules: { 'no-console': 'off' } },
+  { files: ['lib/log.ts'], rules: { 'no-console': 'off' } },
 ]
 export default config

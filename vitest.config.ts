@@ -1,4 +1,3 @@
-import path from 'node:path'
 import { defineConfig } from 'vitest/config'
 
 const root = import.meta.dirname
@@ -6,7 +5,7 @@ const root = import.meta.dirname
 /** `unit` is fast and needs nothing; `reference` asks Orocos KDL; `api` shares one built server over HTTP; `service` starts
  *  servers and databases of its own, and kills some of them. */
 export default defineConfig({
-  resolve: { alias: { '@': root, 'server-only': path.resolve(root, 'tests/empty.ts') } },
+  resolve: { alias: { '@': root } },
   test: {
     environment: 'node',
     pool: 'forks',

@@ -24,7 +24,7 @@ export function siteOrigins(): readonly string[] {
 export const isServedByTls = (): boolean => siteUrl().startsWith('https:')
 
 /** Folder of the embedded database and of what belongs to this installation. */
-export const dataDir = (): string => path.resolve(text('ELBOWROOM_DATA_DIR') ?? '.data')
+export const dataDir = (): string => path.resolve(/* turbopackIgnore: true */ text('ELBOWROOM_DATA_DIR') ?? '.data')
 
 /** Address of a PostgreSQL server, or undefined for the embedded database. */
 export const databaseUrl = (): string | undefined => text('DATABASE_URL')
@@ -45,6 +45,5 @@ export function sessionSecret(): string {
 
 export const isProduction = (): boolean => process.env.NODE_ENV === 'production'
 export const isBuilding = (): boolean => process.env.NEXT_PHASE === 'phase-production-build'
-export const isNodeRuntime = (): boolean => process.env.NEXT_RUNTIME === 'nodejs'
 export const logLevel = (): string => text('LOG_LEVEL') ?? 'info'
 export const demoPassword = (): string | undefined => text('DEMO_PASSWORD')

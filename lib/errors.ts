@@ -124,7 +124,7 @@ export const PROBLEMS = {
   'too-large': {
     status: 413,
     title: 'The body is too large',
-    meaning: 'The body is larger than this operation reads. Reading stopped there; nothing was stored.',
+    meaning: 'The body is larger than this operation reads. Nothing was computed or stored.',
     remedy: 'Send less at once; the detail says how much is read.',
   },
   'answer-too-large': {

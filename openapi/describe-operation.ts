@@ -21,7 +21,7 @@ const parametersOf = (path: string) =>
 
 const headersOf = (operation: Operation) => [
   ...(operation.edits ? [{ name: 'If-Match', description: 'ETag of the state that is changed.', required: true }] : []),
-  ...(operation.pinned ? [{ name: 'If-Match', description: '"<fingerprint>": only this model.', required: false }] : []),
+  ...(operation.pinned ? [{ name: 'If-Match', description: 'The fingerprint in double quotes: compute from this model only.', required: false }] : []),
   ...(operation.conditional ? [{ name: 'If-None-Match', description: 'ETag that is already held.', required: false }] : []),
 ]
 

@@ -26,7 +26,7 @@ export class Refusal extends Error {
 /** Turns the text of an application/problem+json answer into a Refusal. */
 export function refusalFrom(status: number, text: string): Refusal {
   try {
-    const { type, title, detail, errors, requestId, ...members } = JSON.parse(text) as Record<string, unknown>
+    const { type, title, detail, errors, requestId, ...members } = (JSON.parse(text) ?? {}) as Record<string, unknown>
     if (typeof type !== 'string') throw new SyntaxError('no problem type')
     const sentence = typeof detail === 'string' ? detail : typeof title === 'string' ? title : `The service answered ${status}.`
     const reference = status >= 500 && typeof requestId === 'string' ? ` Request id: ${requestId}.` : ''

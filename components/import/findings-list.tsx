@@ -34,6 +34,7 @@ export function FindingsList(props: FindingsListProps) {
 
 function VirtualFindings({ findings, chosen, onChoose, className }: FindingsListProps) {
   const scroller = useRef<HTMLDivElement>(null)
+  // eslint-disable-next-line react-hooks/incompatible-library -- its functions are called here and never handed on
   const virtual = useVirtualizer({
     count: findings.length,
     getScrollElement: () => scroller.current,

@@ -33,8 +33,8 @@ export function ImportDesk({ team, model }: ImportDeskProps) {
   const current = chosen !== null && chosen.file === file ? chosen : null
 
   return (
-    <div className="grid gap-6 desk:grid-cols-[minmax(0,1fr)_minmax(0,1.15fr)]">
-      <div className="min-w-0 space-y-8">
+    <div className="grid grid-cols-[minmax(0,1fr)] gap-x-6 gap-y-8 desk:grid-cols-[minmax(0,1fr)_minmax(0,1.15fr)] desk:grid-rows-[auto_1fr]">
+      <div className="space-y-8">
         <section aria-label="File" className="space-y-4">
           <DropArea onFile={check} present={file?.name ?? null} />
           {checked?.state === 'sending' ? <UploadProgress label="Checking" sent={checked.sent} total={checked.file.size} onCancel={cancel} /> : null}
@@ -53,6 +53,21 @@ export function ImportDesk({ team, model }: ImportDeskProps) {
             }}
           />
         ) : null}
+      </div>
+      <div className="desk:col-start-2 desk:row-span-2 desk:row-start-1">
+        {checked?.text == null ? (
+          <ImportSteps />
+        ) : (
+          <SourceView
+            text={checked.text}
+            fileName={checked.file.name}
+            findings={checked.findings}
+            place={current?.place ?? null}
+            className="h-[70vh] desk:sticky desk:top-16 desk:h-[calc(100dvh-9.5rem)]"
+          />
+        )}
+      </div>
+      <div className="space-y-8">
         {checked?.structure === undefined ? null : (
           <section aria-labelledby="import-structure" className="space-y-3">
             <h2 id="import-structure">What was read</h2>
@@ -85,19 +100,6 @@ export function ImportDesk({ team, model }: ImportDeskProps) {
               <FurtherRevisionForm team={team} file={formFile} ready={ready} model={model ?? ''} onFindings={replaceFindings} />
             </div>
           </section>
-        )}
-      </div>
-      <div className="min-w-0">
-        {checked?.text == null ? (
-          <ImportSteps />
-        ) : (
-          <SourceView
-            text={checked.text}
-            fileName={checked.file.name}
-            findings={checked.findings}
-            place={current?.place ?? null}
-            className="h-[70vh] desk:sticky desk:top-16 desk:h-[calc(100dvh-9.5rem)]"
-          />
         )}
       </div>
     </div>

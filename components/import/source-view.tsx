@@ -30,6 +30,7 @@ export function SourceView({ text, fileName, findings, place, onLine, className 
   const rows = useMemo(() => sourceRows(text), [text])
   const severities = useMemo(() => severityByLine(findings), [findings])
   const marked = useMemo(() => (place === null ? null : { line: place.line, ...rows.find(place.line, place.column) }), [place, rows])
+  // eslint-disable-next-line react-hooks/incompatible-library -- its functions are called here and never handed on
   const virtual = useVirtualizer({
     count: rows.count,
     getScrollElement: () => scroller.current,

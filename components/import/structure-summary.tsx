@@ -26,7 +26,7 @@ export function StructureSummary({ structure }: { readonly structure: Structure 
             </dd>
           </div>
         ))}
-        <div>
+        <div className="max-tablet:col-span-2">
           <dt className="label">Fingerprint</dt>
           <dd>
             <Fingerprint value={fingerprint} />

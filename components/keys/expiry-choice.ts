@@ -12,7 +12,7 @@ export type ExpiryPreset = (typeof EXPIRY_PRESETS)[number]['value']
 const DAY_MS = 86_400_000
 
 /** The moment of a choice, RFC 3339; null for never. A date means the end of that day where the reader is. now: ms since the epoch. */
-export function expiryInstant(preset: ExpiryPreset, date: string, now: number): string | null {
+export function expiryInstant(preset: ExpiryPreset, date: string, now: number = Date.now()): string | null {
   if (preset === 'never') return null
   if (preset === 'date') return new Date(`${date}T23:59:59.999`).toISOString()
   return new Date(now + Number(preset) * DAY_MS).toISOString()

@@ -1,4 +1,5 @@
 import { createColumnHelper, createSortedRowModel, rowSortingFeature, sortFn_text, tableFeatures } from '@tanstack/react-table'
+import clsx from 'clsx'
 import { Timestamp } from '@/components/ui/timestamp'
 import type { Key } from '@/lib/contract/key-operations'
 import { KeyEditDialog } from './key-edit-dialog'
@@ -8,6 +9,15 @@ import { KeyRevokeDialog } from './key-revoke-dialog'
 export const keyFeatures = tableFeatures({ rowSortingFeature, sortedRowModel: createSortedRowModel(), sortFns: { text: sortFn_text } })
 
 const column = createColumnHelper<typeof keyFeatures, Key>()
+
+/** What can be done with a key; nothing with a revoked one. */
+const KeyActs = ({ team, item, className }: { readonly team: string; readonly item: Key; readonly className: string }) =>
+  item.state === 'revoked' ? null : (
+    <div className={clsx('flex-wrap gap-2', className)}>
+      <KeyEditDialog team={team} item={item} />
+      <KeyRevokeDialog team={team} item={item} />
+    </div>
+  )
 
 /** Sorts behind every date. */
 const NEVER = '9999'
@@ -23,6 +33,9 @@ export const keyColumns = (team: string, now: number) =>
           <bdi className="block font-semibold break-words">{original.label}</bdi>
           <span className="num text-soft">{original.prefix}…</span>
           <span className="block tablet:hidden">{original.scopes.join(', ')}</span>
+          <span className="block text-soft tablet:hidden">
+            {original.lastUsedAt === undefined ? 'never used' : <>used <Timestamp at={original.lastUsedAt} /></>}
+          </span>
         </>
       ),
     }),
@@ -36,7 +49,12 @@ export const keyColumns = (team: string, now: number) =>
       id: 'state',
       header: 'State',
       sortFn: 'text',
-      cell: ({ row: { original } }) => <KeyExpiry item={original} now={now} />,
+      cell: ({ row: { original } }) => (
+        <>
+          <KeyExpiry item={original} now={now} />
+          <KeyActs team={team} item={original} className="mt-2 flex tablet:hidden" />
+        </>
+      ),
     }),
     column.accessor((key) => key.lastUsedAt ?? '', {
       id: 'lastUsedAt',
@@ -62,12 +80,6 @@ export const keyColumns = (team: string, now: number) =>
     column.display({
       id: 'acts',
       header: () => <span className="sr-only">Acts</span>,
-      cell: ({ row: { original } }) =>
-        original.state === 'revoked' ? null : (
-          <div className="flex flex-wrap justify-end gap-2">
-            <KeyEditDialog team={team} item={original} />
-            <KeyRevokeDialog team={team} item={original} />
-          </div>
-        ),
+      cell: ({ row: { original } }) => <KeyActs team={team} item={original} className="flex justify-end" />,
     }),
   ])

@@ -41,7 +41,7 @@ export function KeyEditForm({ team, read, onDone }: KeyEditFormProps) {
   const submit = handleSubmit(async (form) => {
     setFailure(undefined)
     const movesExpiry = dirtyFields.preset === true || dirtyFields.date === true
-    const body = { label: form.label, ...(movesExpiry ? { expiresAt: expiryInstant(form.preset, form.date, Date.now()) } : {}) }
+    const body = { label: form.label, ...(movesExpiry ? { expiresAt: expiryInstant(form.preset, form.date) } : {}) }
     try {
       await call('editKey', { path, body, ifMatch: seen.etag ?? '' })
     } catch (error) {

@@ -14,8 +14,8 @@ interface KeysTableProps {
   readonly now: number
 }
 
-/** Columns that a phone leaves out; what matters of them stands in the first. */
-const WIDE_ONLY = new Set(['scopes', 'lastUsedAt', 'createdAt'])
+/** Columns that a phone leaves out; what matters of them stands in the two that are left. */
+const WIDE_ONLY = new Set(['scopes', 'lastUsedAt', 'createdAt', 'acts'])
 
 /** The keys, sortable by every column. */
 export function KeysTable({ team, keys, now }: KeysTableProps) {

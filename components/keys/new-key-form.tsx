@@ -34,7 +34,7 @@ export function NewKeyForm({ team, onMade }: NewKeyFormProps) {
 
   const submit = handleSubmit(async ({ label, scopes, preset: chosen, date }) => {
     setFailure(undefined)
-    const expiresAt = expiryInstant(chosen, date, Date.now()) ?? undefined
+    const expiresAt = expiryInstant(chosen, date) ?? undefined
     try {
       onMade((await call('createKey', { path: { team }, body: { label, scopes, expiresAt } })).body)
     } catch (error) {

@@ -52,8 +52,8 @@ export function ModelRows({ team, models, hasMore, onEnd }: ModelRowsProps) {
 
   return (
     <div role="table" aria-label="Models" aria-rowcount={hasMore ? -1 : models.length + 1}>
-      <div role="rowgroup">
-        <div role="row" aria-rowindex={1} className={clsx('label sticky top-12 z-10 hidden border-b border-ink bg-page px-2 py-1.5 font-semibold', COLUMNS)}>
+      <div role="rowgroup" className="sticky top-12 z-10 bg-page">
+        <div role="row" aria-rowindex={1} className={clsx('label hidden border-b border-ink px-2 py-1.5 font-semibold', COLUMNS)}>
           {HEADS.map((head, i) => (
             <span key={head} role="columnheader" className={i > 3 ? 'text-right' : undefined}>
               {head}

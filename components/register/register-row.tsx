@@ -30,7 +30,7 @@ export function RegisterRow({ team, model, index }: RegisterRowProps) {
             <bdi>{name}</bdi>
           </Link>
           <p className="label truncate" dir="auto">
-            {note?.split('\n', 1)[0] ?? ' '}
+            {note?.split('\n', 1)[0] ?? '\u00a0'}
           </p>
         </div>
         <div role="cell" className="num min-w-0 truncate text-soft">

@@ -17,7 +17,7 @@ interface DrawingPanelProps {
 
 /** The drawing field of a sheet: the chain at a configuration that can be typed over, and the caution under it. */
 export function DrawingPanel({ chain, resting, name }: DrawingPanelProps) {
-  const { q, isResting, draw } = useDrawnConfiguration(chain, resting)
+  const { q, isResting, draw } = useDrawnConfiguration(chain.joints, resting)
   const label = `${name}, drawn from ${chain.base} to ${chain.tip}; the joints and their limits stand in the table beside it.`
   return (
     <DrawingFrame

@@ -30,11 +30,11 @@ export function FindingsSummary({ findings, counts, sourceHref }: FindingsSummar
             <li key={i} className="grid grid-cols-[5.5rem_minmax(0,1fr)] items-baseline gap-x-2 border-b border-hair px-2 py-1.5">
               <SeverityMark severity={finding.severity} />
               <p className="break-words">
-                <TextLink href={`${sourceHref}#L${finding.line}`} className="num" aria-label={`Line ${finding.line} of the source`}>
+                <TextLink inline href={`${sourceHref}#L${finding.line}`} className="num" aria-label={`Line ${finding.line} of the source`}>
                   L{finding.line}
                 </TextLink>{' '}
                 {finding.message}{' '}
-                <TextLink href={`/docs/findings/${finding.rule}`} className="whitespace-nowrap">
+                <TextLink inline href={`/docs/findings/${finding.rule}`} className="whitespace-nowrap">
                   {finding.rule}
                 </TextLink>
               </p>

@@ -3,13 +3,14 @@
 import { CopyButton } from '@/components/ui/copy-button'
 import { TextLink } from '@/components/ui/text-link'
 import { useUnits } from '@/components/ui/units-context'
-import type { Chain } from '@/lib/kinematics/chain'
+import type { ChainJoint } from '@/lib/kinematics/chain'
 import { forwardKinematicsCurl } from './request-text'
 import { useDrawnConfiguration } from './use-drawn-configuration'
 
 interface RequestPanelProps {
-  readonly chain: Chain
-  readonly isDefaultChain: boolean
+  readonly joints: readonly ChainJoint[]
+  /** Left out of the request when it is the default one. */
+  readonly chain?: { readonly base: string; readonly tip: string } | undefined
   readonly resting: readonly number[]
   readonly site: string
   readonly path: string
@@ -17,11 +18,10 @@ interface RequestPanelProps {
 }
 
 /** The request that gives the pose of the tip in the configuration drawn, ready to be pasted. */
-export function RequestPanel({ chain, isDefaultChain, resting, site, path, fingerprint }: RequestPanelProps) {
+export function RequestPanel({ joints, chain, resting, site, path, fingerprint }: RequestPanelProps) {
   const { units } = useUnits()
-  const { q } = useDrawnConfiguration(chain, resting)
-  const { base, tip } = chain
-  const text = forwardKinematicsCurl({ site, path, fingerprint, chain: isDefaultChain ? undefined : { base, tip }, joints: chain.joints, q, units })
+  const { q } = useDrawnConfiguration(joints, resting)
+  const text = forwardKinematicsCurl({ site, path, fingerprint, chain, joints, q, units })
   return (
     <section aria-labelledby="sheet-request" data-screen-only>
       <div className="flex flex-wrap items-baseline justify-between gap-x-4">

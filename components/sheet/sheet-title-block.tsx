@@ -21,7 +21,7 @@ export function SheetTitleBlock({ revision, total }: SheetTitleBlockProps) {
   return (
     <TitleBlock label="Title block">
       <TitleCell label="Model" span={6}>
-        <bdi className="block text-18 break-words">{revision.model.name}</bdi>
+        <bdi className="block text-left text-18 break-words">{revision.model.name}</bdi>
       </TitleCell>
       <TitleCell label="Fingerprint" span={4}>
         <Fingerprint value={revision.fingerprint} />
@@ -52,7 +52,7 @@ export function SheetTitleBlock({ revision, total }: SheetTitleBlockProps) {
 function By({ by, at }: { readonly by: string; readonly at: string }) {
   return (
     <>
-      <bdi className="block break-words">{by}</bdi>
+      <bdi className="block text-left break-words">{by}</bdi>
       <Timestamp at={at} dayOnly className="font-normal" />
     </>
   )

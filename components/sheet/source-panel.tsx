@@ -21,7 +21,7 @@ export function SourcePanel({ path, fileName, sourceDigest, fingerprint }: Sourc
     <section aria-labelledby="sheet-source">
       <h2 id="sheet-source">Source</h2>
       <p className="num mt-1 break-all">
-        <bdi>{fileName}</bdi>
+        <bdi dir="ltr">{fileName}</bdi>
       </p>
       <dl className="mt-2 space-y-2">
         {digests.map(({ label, value, what }) => (

@@ -45,7 +45,7 @@ export function Field({ id, label, hint, error, className, children }: FieldProp
 /** The error of a field, in a region that speaks when it fills. */
 export function FieldError({ id, error }: { readonly id: string; readonly error: string | undefined }) {
   return (
-    <p id={`${id}-error`} aria-live="polite" className={clsx('font-medium text-verm', error && 'mt-1')}>
+    <p id={`${id}-error`} aria-live="polite" className={clsx('font-medium text-verm first-letter:uppercase', error && 'mt-1')}>
       {error ?? ''}
     </p>
   )

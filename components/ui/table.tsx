@@ -10,7 +10,7 @@ interface TableProps extends ComponentProps<'table'> {
 /** A table ruled with hairlines under a strong head line. A wide one scrolls sideways inside itself. */
 export function Table({ caption, hideCaption = true, className, children, ...rest }: TableProps) {
   return (
-    <div className="scroll-x" tabIndex={0} role="group" aria-label={caption}>
+    <div className="relative scroll-x" tabIndex={0} role="group" aria-label={caption}>
       <table {...rest} className={clsx('w-full border-collapse', className)}>
         <caption className={hideCaption ? 'sr-only' : 'py-1 text-left font-semibold'}>{caption}</caption>
         {children}

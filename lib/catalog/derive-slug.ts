@@ -4,12 +4,16 @@ const LONGEST = 64
 /** Room for `-` and the number of a further model of the same name. */
 const LONGEST_SUFFIX = 8
 
+/** Letters that are no other letter with a mark. */
+const SPELLED: Readonly<Record<string, string>> = { ß: 'ss', æ: 'ae', œ: 'oe', ø: 'o', đ: 'd', ð: 'd', þ: 'th', ł: 'l', ı: 'i' }
+
 /** A slug made of a name: Latin letters without their marks, digits and hyphens. */
 export function deriveSlug(name: string): string {
   const plain = name
     .normalize('NFKD')
     .replace(/\p{M}/gu, '')
     .toLowerCase()
+    .replace(/[ßæœøđðþłı]/g, (letter) => SPELLED[letter]!)
     .replace(/[^a-z0-9]+/g, '-')
     .slice(0, LONGEST)
     .replace(/^-+|-+$/g, '')

@@ -30,13 +30,13 @@ const Scopes = z
   .min(1, 'choose at least one scope')
   .refine((scopes) => new Set(scopes).size === scopes.length, 'name each scope once')
 
-/** When a key ends: ahead of now. */
-const Expiry = Instant.refine((text) => Date.parse(text) > Date.now(), 'lies in the past: choose a time ahead')
+/** When a key ends: ahead of now. What is no time at all is told by Instant. */
+const Expiry = Instant.refine((text) => !(Date.parse(text) <= Date.now()), 'lies in the past: choose a time ahead')
 
 export const KeyQuestion = z.strictObject({
   label: Name,
   scopes: Scopes,
-  expiresAt: Expiry.optional().meta({ description: 'Left out: the key does not expire.' }),
+  expiresAt: Expiry.optional().meta({ description: 'Left out: the key does not expire.', example: '2031-06-30T22:00:00Z' }),
 })
 
 const KEYS = '/teams/{team}/keys'
@@ -80,7 +80,7 @@ export const KEY_OPERATIONS = {
     summary: 'Change label or expiry',
     body: z.strictObject({
       label: Name.optional(),
-      expiresAt: Expiry.nullable().optional().meta({ description: 'null: the key does not expire.' }),
+      expiresAt: Expiry.nullable().optional().meta({ description: 'null: the key does not expire.', example: '2031-06-30T22:00:00Z' }),
     }),
     answer: { status: 200, schema: Key },
     errors: [],

@@ -29,6 +29,8 @@ function describeBound(issue: z.core.$ZodIssueTooBig | z.core.$ZodIssueTooSmall)
   return counted === undefined ? `must be ${amount}` : `must have ${amount} ${counted}`
 }
 
+const oneOf = (values: readonly unknown[]) => (values.length === 1 ? '' : 'one of ') + values.map((value) => JSON.stringify(value)).join(', ')
+
 /** What one issue of zod says, in our words. input: the value at the issue's path. */
 function describe(issue: z.core.$ZodIssue, input: unknown): string {
   switch (issue.code) {
@@ -37,9 +39,10 @@ function describe(issue: z.core.$ZodIssue, input: unknown): string {
       if (!issue.message.startsWith('Invalid input')) return issue.message
       return input === undefined ? 'is missing' : `must be ${WANTED[issue.expected] ?? issue.expected}, not ${kindOf(input)}`
     case 'invalid_value':
-      return `must be ${issue.values.length === 1 ? '' : 'one of '}${issue.values.map((value) => JSON.stringify(value)).join(', ')}`
+      return `must be ${oneOf(issue.values)}`
     case 'invalid_union':
-      return input === undefined ? 'is missing' : 'is not one of the values that the reference lists here'
+      if (input === undefined) return 'is missing'
+      return 'options' in issue && issue.options !== undefined ? `must be ${oneOf(issue.options)}` : 'is not one of the values that the reference lists here'
     case 'too_big':
     case 'too_small':
       return describeBound(issue)

@@ -9,25 +9,46 @@ export const MOST_URDF_BYTES = 8 * MEBIBYTE
 /** What the text fields and the boundaries of a multipart body may take beside the file. */
 const MULTIPART_ROOM = 64 * 1024
 
-/** Reads the body up to `most` bytes and stops there: fails with too-large. */
+/** So much of a refused body is still taken and thrown away, because many clients read the answer only when they have sent all. */
+const MOST_DISCARDED = 64 * MEBIBYTE
+
+/** Takes what still comes of a refused body. */
+async function discard(reader: ReadableStreamDefaultReader<Uint8Array>): Promise<void> {
+  try {
+    for (let length = 0; length <= MOST_DISCARDED; ) {
+      const { done, value } = await reader.read()
+      if (done) return
+      length += value.length
+    }
+    await reader.cancel()
+  } catch {
+    // The client has gone away, which is its right.
+  }
+}
+
+/** Reads the body up to `most` bytes: fails with too-large. A body that says its length is taken to its end first, so that a
+ *  client that closes the connection behind it gets its answer; one that does not is answered while it still sends. */
 async function readBytes(request: Request, most: number, what: string): Promise<Uint8Array> {
-  const tooLarge = () => fail('too-large', `${what} may have at most ${most} bytes. Reading stopped there; nothing was stored.`)
-  const declared = Number(request.headers.get('content-length') ?? 0)
-  if (declared > most) tooLarge()
   if (request.body === null) return new Uint8Array()
+  const reader = request.body.getReader()
+  const tooLarge = () => fail('too-large', `${what} may have at most ${most} bytes. Nothing was stored.`)
+  const declared = Number(request.headers.get('content-length') ?? 0)
+  if (declared > most) {
+    const discarded = discard(reader)
+    if (declared <= MOST_DISCARDED) await discarded
+    tooLarge()
+  }
   const pieces: Uint8Array[] = []
-  let length = 0
-  for (const reader = request.body.getReader(); ; ) {
+  for (let length = 0; ; ) {
     const { done, value } = await reader.read()
-    if (done) break
+    if (done) return new Uint8Array(Buffer.concat(pieces, length))
     length += value.length
     if (length > most) {
-      await reader.cancel().catch(() => undefined)
+      void discard(reader)
       tooLarge()
     }
     pieces.push(value)
   }
-  return new Uint8Array(Buffer.concat(pieces, length))
 }
 
 /** Fails with unsupported-media-type unless the body is of this type, uncompressed, and UTF-8 where it says a charset. */

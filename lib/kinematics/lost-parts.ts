@@ -50,8 +50,9 @@ export function lostParts(work: Workspace, task: Task, rank: number, known: Stru
   ] as const
   // Either may be below the threshold that both together exceed: then the larger one speaks.
   const loudest = Math.min(threshold, Math.max(norm(forGood), norm(here)))
+  // A subnormal wish makes the threshold 0, and a part of length 0 has no direction.
   return parts
-    .filter(({ part }) => norm(part) >= loudest)
+    .filter(({ part }) => norm(part) > 0 && norm(part) >= loudest)
     .map(({ part, cause }) => ({ direction: inTwist(unit(part), task), asked: signOf(part), cause }))
 }
 

@@ -11,6 +11,7 @@ import { may } from '@/lib/access/permissions'
 import { includesRole } from '@/lib/access/roles'
 import { visit } from '@/lib/http/visit'
 import { getDesk } from '@/lib/teams/get-desk'
+import { requestTime } from '../request-time'
 
 export const metadata: Metadata = { title: 'Desk' }
 
@@ -42,7 +43,7 @@ export default async function DeskPage({ params }: { readonly params: Promise<{ 
           <div className="grid gap-8">
             <DeskReviews team={team} reviews={desk.reviews} mayRelease={includesRole(caller.role, 'approver')} fourEyes={caller.team.fourEyes} />
             {mayImport ? <DeskDrafts team={team} drafts={desk.drafts} /> : null}
-            {may(caller, 'listKeys') ? <DeskKeys team={team} keys={desk.keys} now={Date.now()} /> : null}
+            {may(caller, 'listKeys') ? <DeskKeys team={team} keys={desk.keys} now={requestTime()} /> : null}
           </div>
           <DeskLatest team={team} latest={desk.latest} />
         </div>

@@ -1,5 +1,4 @@
 import { describe, expect, it } from 'vitest'
-import { decodeXml } from '@/lib/urdf/decode-xml'
 import { parseUrdf } from '@/lib/urdf/parse-urdf'
 import { bytesOf } from './urdf-text'
 
@@ -31,7 +30,6 @@ describe('the encoding of a file', () => {
     const { description, findings } = parseUrdf(bytes)
     expect(findings).toEqual([])
     expect(description!.links[0]!.name).toBe('Gelenk-ä 🤖')
-    expect(decodeXml(bytes)).toContain('Gelenk-ä 🤖')
   })
 
   it('is read as ASCII where it says so and is', () => {
@@ -62,7 +60,6 @@ describe('the encoding of a file', () => {
     expect(description).toBeNull()
     expect(findings).toMatchObject([{ rule: 'encoding-unsupported', line, column }])
     expect(findings[0]!.message).toContain(words)
-    expect(typeof decodeXml(bytes)).toBe('string')
   })
 
   it('keeps U+FFFD where the file has it', () => {

@@ -8,6 +8,7 @@ import { siteUrl } from '@/lib/env'
 import { visit } from '@/lib/http/visit'
 import { listKeys } from '@/lib/keys/list-keys'
 import { reading } from '../../reading'
+import { requestTime } from '../../request-time'
 import { findTrialModel } from './trial-model'
 
 export const metadata: Metadata = { title: 'Keys' }
@@ -30,7 +31,7 @@ export default async function KeysPage({ params }: { readonly params: Promise<{ 
         detail={`for gateways and scripts of ${caller.team.name}`}
         actions={<NewKeyDialog team={team} site={siteUrl()} trialModel={trialModel} />}
       />
-      <Keys team={team} initial={body.nextCursor === undefined ? body.items : undefined} now={Date.now()} />
+      <Keys team={team} initial={body.nextCursor === undefined ? body.items : undefined} now={requestTime()} />
     </Main>
   )
 }

@@ -80,7 +80,7 @@ export default async function SheetPage({ params, searchParams }: SheetPageProps
         }
         titleBlock={<SheetTitleBlock revision={revision} total={model.revisions} />}
       >
-        {chain === null ? null : <ChainJoints chain={chain} rows={rowsOfChain(chain.joints, findings.items)} resting={values} />}
+        {chain === null ? null : <ChainJoints rows={rowsOfChain(chain.joints, findings.items)} resting={values} />}
         <FindingsSummary findings={findings.items} counts={revision.findings} sourceHref={`${href(revision.revision)}/source`} />
         <RevisionTable team={team} revisions={revisions.items} current={revision.revision} total={model.revisions} />
       </SheetFrame>
@@ -96,8 +96,8 @@ export default async function SheetPage({ params, searchParams }: SheetPageProps
         />
         {chain === null ? null : (
           <RequestPanel
-            chain={chain}
-            isDefaultChain={drawn.isDefault}
+            joints={chain.joints}
+            chain={drawn.isDefault ? undefined : { base: chain.base, tip: chain.tip }}
             resting={values}
             site={siteUrl()}
             path={`/teams/${team}/models/${model.slug}/revisions/${revision.revision}`}
