@@ -14,7 +14,7 @@ export function limitRates(
   chain: Chain, work: Workspace, limits: RateLimits, weighted: boolean, previousRates: ArrayLike<number> | undefined, record: RateRecord,
 ): void {
   const { bounds, scaling } = work
-  record.saturated.fill(0)
+  for (let j = 0; j < record.saturated.length; j++) record.saturated[j] = 0
   if (limits.rates === 'report') {
     scaling.scale = 1
     scaling.secondaryScale = 1
@@ -24,6 +24,11 @@ export function limitRates(
   checkLength(chain, limits.derating, 'deratings')
   checkLength(chain, limits.accelerations, 'accelerations')
   checkLength(chain, previousRates, 'previous rates')
+  // What most configurations of a batch need: nothing is bounded but by known rates, and all rates are within them.
+  if (typeof limits.derating === 'number' && limits.dt === undefined && areWithin(work.prepared.rate, limits.derating, record)) {
+    addUp(record, 1, 1)
+    return
+  }
   fillRateBounds(bounds, chain.joints, work.q, limits, previousRates)
   const kept = scaleToBounds(bounds, record.primaryRates, record.secondaryRates, scaling)
   if (limits.rates === 'saturate' && (!kept || scaling.scale < 1)) {
@@ -31,7 +36,7 @@ export function limitRates(
     const { rows, rank } = work.solved
     const best = saturateRates(rows, rank, record.primaryRates, bounds, weighted ? work.rootWeights : null, room)
     // Evenly slowed rates may be faster, where the secondary motion takes load off the joint that binds.
-    if (best >= 0 && (!kept || best > scaling.scale)) {
+    if (best >= 0 && (!kept || (best > scaling.scale && room.saturated.includes(1)))) {
       record.scale = best
       record.secondaryScale = work.solved.wished === 0 ? 1 : 0
       record.saturated.set(room.saturated)
@@ -42,6 +47,11 @@ export function limitRates(
   addUp(record, scaling.scale, scaling.secondaryScale)
   if (kept) clampRounding(work, record)
   else brake(work, record)
+}
+
+function areWithin(rate: Float64Array, derating: number, { primaryRates, secondaryRates }: RateRecord): boolean {
+  for (let j = 0; j < rate.length; j++) if (!(Math.abs(primaryRates[j]! + secondaryRates[j]!) <= rate[j]! * derating)) return false
+  return true
 }
 
 function addUp(record: RateRecord, scale: number, secondaryScale: number): void {

@@ -1,8 +1,8 @@
 import { dot } from './dot'
 
-/** A row that keeps less than this part of its square when the rows before are taken out is cleaned once more: what rounding left in
- *  it has grown against it. Daniel, Gragg, Kaufman & Stewart 1976. */
-const CLEANED_AGAIN = 0.5
+/** A row that keeps less than this part of its square (a tenth of its length) when the rows before are taken out is cleaned once more:
+ *  what rounding left in it has grown against it. Daniel, Gragg, Kaufman & Stewart 1976. */
+const CLEANED_AGAIN = 0.01
 
 /** A = L·Q of the row-major m x n matrix `a`, m <= n, by Gram-Schmidt on its rows: `rows` (m x n) receives the orthonormal rows of Q,
  *  `lower` (m x m) the lower triangle of L, diagonal above 0. False, and unfinished, where a row lies wholly in those before. */
@@ -49,6 +49,13 @@ export function solveLower(lower: Float64Array, m: number, b: Float64Array, x: F
     for (let k = 0; k < i; k++) sum -= lower[i * m + k]! * x[k]!
     x[i] = sum / lower[i * m + i]!
   }
+}
+
+/** The Frobenius norm of a lower triangle (m x m), which is at least its largest singular value. */
+export function triangleNorm(lower: Float64Array, m: number): number {
+  let squares = 0
+  for (let i = 0; i < m; i++) for (let k = 0; k <= i; k++) squares += lower[i * m + k]! * lower[i * m + k]!
+  return Math.sqrt(squares)
 }
 
 /** At most the smallest singular value of a lower triangle (m x m), and at least a part 1/√m of it: one over the Frobenius norm of its
