@@ -14,21 +14,13 @@ export function limitRates(
   chain: Chain, work: Workspace, limits: RateLimits, weighted: boolean, previousRates: ArrayLike<number> | undefined, record: RateRecord,
 ): void {
   const { bounds, scaling } = work
-  for (let j = 0; j < record.saturated.length; j++) record.saturated[j] = 0
-  if (limits.rates === 'report') {
-    scaling.scale = 1
-    scaling.secondaryScale = 1
-    addUp(record, 1, 1)
-    return
-  }
+  const within = addBoth(work.prepared.rate, limits.derating, record)
+  if (limits.rates === 'report') return
   checkLength(chain, limits.derating, 'deratings')
   checkLength(chain, limits.accelerations, 'accelerations')
   checkLength(chain, previousRates, 'previous rates')
   // What most configurations of a batch need: nothing is bounded but by known rates, and all rates are within them.
-  if (typeof limits.derating === 'number' && limits.dt === undefined && areWithin(work.prepared.rate, limits.derating, record)) {
-    addUp(record, 1, 1)
-    return
-  }
+  if (within && limits.dt === undefined) return
   fillRateBounds(bounds, chain.joints, work.q, limits, previousRates)
   const kept = scaleToBounds(bounds, record.primaryRates, record.secondaryRates, scaling)
   if (limits.rates === 'saturate' && (!kept || scaling.scale < 1)) {
@@ -49,9 +41,20 @@ export function limitRates(
   else brake(work, record)
 }
 
-function areWithin(rate: Float64Array, derating: number, { primaryRates, secondaryRates }: RateRecord): boolean {
-  for (let j = 0; j < rate.length; j++) if (!(Math.abs(primaryRates[j]! + secondaryRates[j]!) <= rate[j]! * derating)) return false
-  return true
+/** Fills the record with both motions whole; true where they are known to be within the rate limits, times one derating for all. */
+function addBoth(rate: Float64Array, derating: number | ArrayLike<number>, record: RateRecord): boolean {
+  const { rates, primaryRates, secondaryRates, saturated } = record
+  const part = typeof derating === 'number' ? derating : 0
+  let within = true
+  for (let j = 0; j < rate.length; j++) {
+    const sum = primaryRates[j]! + secondaryRates[j]! + 0
+    rates[j] = sum
+    saturated[j] = 0
+    if (!(Math.abs(sum) <= rate[j]! * part)) within = false
+  }
+  record.scale = 1
+  record.secondaryScale = 1
+  return within
 }
 
 function addUp(record: RateRecord, scale: number, secondaryScale: number): void {

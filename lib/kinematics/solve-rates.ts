@@ -78,7 +78,7 @@ function isEasy(work: Workspace, m: number, inverse: Inverse): boolean {
   const floor = undampedFrom(inverse)
   if (m > n || floor === Number.POSITIVE_INFINITY) return false
   if (!factorRows(work.taskJacobian, m, n, work.rows, work.lower)) return false
-  const least = leastSingularValue(work.lower, m, work.coordinates)
+  const least = leastSingularValue(work.lower, m, work.square)
   // Written so that a number that is not finite is not easy.
   return least >= Math.max(floor, SMALLEST) && least > rankTolerance(inverse) * triangleNorm(work.lower, m)
 }

@@ -23,8 +23,8 @@ export function triangleValues(lower: Float64Array, m: number, room: TriangleRoo
   const { square, diagonal, beside } = room
   for (let i = 0; i < m; i++) for (let k = 0; k < m; k++) square[i * m + k] = k <= i ? lower[i * m + k]! : 0
   for (let k = 0; k < m; k++) {
-    diagonal[k] = reflectColumn(square, m, k)
-    beside[k] = k + 1 < m ? reflectRow(square, m, k) : 0
+    reflectColumn(square, m, k, diagonal)
+    reflectRow(square, m, k, beside)
   }
   if (!settle(diagonal, beside, m)) return false
   // Insertion sort, descending, of the absolute values.
@@ -40,14 +40,17 @@ export function triangleValues(lower: Float64Array, m: number, room: TriangleRoo
   return true
 }
 
-/** Reflects what is below the diagonal of column k into the diagonal, and returns that entry. */
-function reflectColumn(a: Float64Array, m: number, k: number): number {
+/** Reflects what is below the diagonal of column k into the diagonal, and writes that entry to `out`: a number that is returned would be
+ *  put on the heap. */
+function reflectColumn(a: Float64Array, m: number, k: number, out: Float64Array): void {
+  out[k] = 0
   let squares = 0
   for (let i = k; i < m; i++) squares += a[i * m + k]! * a[i * m + k]!
-  if (squares < NEGLIGIBLE) return 0
+  if (squares < NEGLIGIBLE) return
   const first = a[k * m + k]!
   const length = first > 0 ? -Math.sqrt(squares) : Math.sqrt(squares)
   const scale = 1 / (squares - first * length)
+  out[k] = length
   a[k * m + k] = first - length
   for (let c = k + 1; c < m; c++) {
     let sum = 0
@@ -55,17 +58,18 @@ function reflectColumn(a: Float64Array, m: number, k: number): number {
     sum *= scale
     for (let i = k; i < m; i++) a[i * m + c]! -= sum * a[i * m + k]!
   }
-  return length
 }
 
 /** The same for what is right of the entry beside the diagonal of row k. */
-function reflectRow(a: Float64Array, m: number, k: number): number {
+function reflectRow(a: Float64Array, m: number, k: number, out: Float64Array): void {
+  out[k] = 0
   let squares = 0
   for (let c = k + 1; c < m; c++) squares += a[k * m + c]! * a[k * m + c]!
-  if (squares < NEGLIGIBLE) return 0
+  if (squares < NEGLIGIBLE) return
   const first = a[k * m + k + 1]!
   const length = first > 0 ? -Math.sqrt(squares) : Math.sqrt(squares)
   const scale = 1 / (squares - first * length)
+  out[k] = length
   a[k * m + k + 1] = first - length
   for (let i = k + 1; i < m; i++) {
     let sum = 0
@@ -73,7 +77,6 @@ function reflectRow(a: Float64Array, m: number, k: number): number {
     sum *= scale
     for (let c = k + 1; c < m; c++) a[i * m + c]! -= sum * a[k * m + c]!
   }
-  return length
 }
 
 /** Drives the entries beside the diagonal to 0. diagonal: d₀ … ; beside: eₖ between dₖ and dₖ₊₁. */
@@ -81,6 +84,8 @@ function settle(d: Float64Array, e: Float64Array, m: number): boolean {
   let size = 0
   for (let k = 0; k < m; k++) size = Math.max(size, Math.abs(d[k]!) + Math.abs(e[k]!))
   const negligible = Number.EPSILON * size
+  // Nothing stands beside the last entry: its place hands this on without putting it on the heap.
+  e[m - 1] = negligible
   let last = m - 1
   for (let round = 0; last > 0; round++) {
     if (round > MOST_ROUNDS * m) return false
@@ -90,13 +95,14 @@ function settle(d: Float64Array, e: Float64Array, m: number): boolean {
     }
     let first = last - 1
     while (first > 0 && Math.abs(e[first - 1]!) > negligible) first--
-    step(d, e, first, last, negligible)
+    step(d, e, first, last, m)
   }
   return true
 }
 
 /** One implicit QR step on the block from `first` to `last`, shifted by the eigenvalue of its last corner of BᵀB (Wilkinson). */
-function step(d: Float64Array, e: Float64Array, first: number, last: number, negligible: number): void {
+function step(d: Float64Array, e: Float64Array, first: number, last: number, m: number): void {
+  const negligible = e[m - 1]!
   // A diagonal entry of 0 takes the shift away, which chases the entry beside it out.
   let zero = false
   for (let k = first; k <= last; k++) zero ||= Math.abs(d[k]!) <= negligible
@@ -112,8 +118,9 @@ function step(d: Float64Array, e: Float64Array, first: number, last: number, neg
   for (let k = first; k < last; k++) {
     // From the right: columns k and k + 1.
     let length = Math.sqrt(y * y + z * z)
-    let cosine = length === 0 ? 1 : y / length
-    let sine = length === 0 ? 0 : z / length
+    let inverse = length === 0 ? 0 : 1 / length
+    let cosine = length === 0 ? 1 : y * inverse
+    let sine = z * inverse
     if (k > first) e[k - 1] = length
     const dk = d[k]!, ek = e[k]!
     y = cosine * dk + sine * ek
@@ -122,8 +129,9 @@ function step(d: Float64Array, e: Float64Array, first: number, last: number, neg
     d[k + 1] = cosine * d[k + 1]!
     // From the left: rows k and k + 1.
     length = Math.sqrt(y * y + z * z)
-    cosine = length === 0 ? 1 : y / length
-    sine = length === 0 ? 0 : z / length
+    inverse = length === 0 ? 0 : 1 / length
+    cosine = length === 0 ? 1 : y * inverse
+    sine = z * inverse
     d[k] = length
     const beside = e[k]!
     y = cosine * beside + sine * d[k + 1]!

@@ -1,6 +1,6 @@
 import fc from 'fast-check'
 import { Matrix, SingularValueDecomposition } from 'ml-matrix'
-import { describe, expect, it } from 'vitest'
+import { describe, it } from 'vitest'
 import { createTriangleRoom, triangleValues } from '@/lib/math/triangle-values'
 import { expectClose } from '../kinematics/expect-close'
 
