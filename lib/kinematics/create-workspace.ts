@@ -1,5 +1,6 @@
 import { identityTransform, TRANSFORM_SIZE } from '@/lib/math/rigid-transform'
 import { createSingularValues, type SingularValues } from '@/lib/math/singular-values'
+import { createTriangleRoom, type TriangleRoom } from '@/lib/math/triangle-values'
 import type { Chain } from './chain'
 import { prepareChain, type PreparedChain } from './prepared-chain'
 import { createRateBounds, type RateBounds } from './rate-bounds'
@@ -53,6 +54,7 @@ export interface Workspace {
   /** Small squares and vectors of the task's size. */
   readonly square: Float64Array
   readonly coordinates: Float64Array
+  readonly triangle: TriangleRoom
   /** How the task Jacobian was solved (see solvePrimary). */
   readonly solved: Solved
   readonly bounds: RateBounds
@@ -73,11 +75,12 @@ export function createWorkspace(chain: Chain): Workspace {
   const n = chain.joints.length
   const lost = chain.motions.find((motion) => !(motion.joint in chain.joints))
   if (lost !== undefined) throw new RangeError(`motion '${lost.name}' follows a joint that the chain does not have`)
+  const prepared = prepareChain(chain)
   return {
     chain,
-    prepared: prepareChain(chain),
+    prepared,
     q: new Float64Array(n),
-    angles: new Float64Array(chain.motions.length),
+    angles: prepared.rest.slice(),
     turns: new Float64Array(2 * chain.motions.length),
     slides: new Float64Array(chain.motions.length),
     baseFromMotions: new Float64Array(TRANSFORM_SIZE * chain.motions.length),
@@ -104,6 +107,7 @@ export function createWorkspace(chain: Chain): Workspace {
     square: new Float64Array(TWIST_SIZE * TWIST_SIZE),
     coordinates: new Float64Array(TWIST_SIZE),
     solved: { rows: NO_ROWS, rank: 0, damping: 0, easy: false, wished: 0 },
+    triangle: createTriangleRoom(TWIST_SIZE),
     bounds: createRateBounds(n),
     scaling: { scale: 1, secondaryScale: 1 },
     saturation: null,

@@ -56,7 +56,7 @@ function starved({ secondaryScale, secondaryRates, saturated }: Finished): Diagn
 function atLimits(chain: Chain, work: Workspace, { limits }: RatePolicy, { rates }: Finished): Diagnosis[] {
   const still = stillness(rates)
   return chain.joints.flatMap(({ name, lower, upper }, i): Diagnosis[] => {
-    if (limits.rates !== 'report' && work.bounds.forced[i] === 1) {
+    if (limits.rates !== 'report' && limits.dt !== undefined && work.bounds.forced[i] === 1) {
       const detail = `Joint '${name}' comes to its limit faster than it can brake: its rate is held to what the limit leaves, beyond its acceleration.`
       return [{ code: 'at-limit', joint: name, detail }]
     }

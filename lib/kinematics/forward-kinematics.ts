@@ -10,27 +10,43 @@ import type { Workspace } from './create-workspace'
 export function forwardKinematics(chain: Chain, q: ArrayLike<number>, work: Workspace, tipFromTool?: ArrayLike<number>): void {
   if (work.chain !== chain) throw new RangeError('this workspace was made for another chain')
   if (q.length !== chain.joints.length) throw new RangeError(`${chain.joints.length} joint values are needed, ${q.length} were given`)
-  const { baseFromFirst, lastFromTip, steps, rotary, joint, multiplier, offset, quarters, rest } = work.prepared
+  const { baseFromFirst, lastFromTip, steps, rotary, offset, quarters, turning } = work.prepared
   const { angles, slides, turns, baseFromMotions } = work
   const count = rotary.length
-  for (let i = 0; i < work.q.length; i++) work.q[i] = q[i]!
-  for (let i = 0; i < count; i++) {
-    const moved = multiplier[i]! * work.q[joint[i]!]! + offset[i]!
-    const turning = rotary[i] === 1
-    angles[i] = turning ? moved + rest[i]! : rest[i]!
-    slides[i] = turning ? 0 : moved
-  }
+  const kept = work.q
+  for (let i = 0; i < kept.length; i++) kept[i] = q[i]!
+  if (turning) for (let i = 0; i < count; i++) angles[i] = kept[i]! + offset[i]!
+  else fillMoved(work, count)
   sinesAndCosines(angles, quarters, count, turns)
   placeFrames(baseFromFirst, steps, turns, slides, count, baseFromMotions)
-  if (count === 0) work.baseFromTip.set(baseFromFirst)
+  if (count === 0) copyTransform(baseFromFirst, work.baseFromTip)
   else multiplyTransforms(baseFromMotions, TRANSFORM_SIZE * (count - 1), lastFromTip, 0, work.baseFromTip, 0)
   placeTool(work, tipFromTool)
 }
 
+/** What each motion turns by, or slides by. */
+function fillMoved({ prepared, q, angles, slides }: Workspace, count: number): void {
+  const { rotary, joint, multiplier, offset } = prepared
+  for (let i = 0; i < count; i++) {
+    const moved = multiplier[i]! * q[joint[i]!]! + offset[i]!
+    if (rotary[i] === 1) angles[i] = moved
+    else slides[i] = moved
+  }
+}
+
 const NO_TOOL = identityTransform()
 
-function placeTool({ baseFromTip, tipFromTool, baseFromTool }: Workspace, given: ArrayLike<number> = NO_TOOL): void {
+function placeTool({ baseFromTip, tipFromTool, baseFromTool }: Workspace, given: ArrayLike<number> | undefined): void {
+  if (given === undefined) {
+    copyTransform(NO_TOOL, tipFromTool)
+    copyTransform(baseFromTip, baseFromTool)
+    return
+  }
   for (let i = 0; i < TRANSFORM_SIZE; i++) tipFromTool[i] = given[i]!
-  if (given === NO_TOOL) baseFromTool.set(baseFromTip)
-  else multiplyTransforms(baseFromTip, 0, tipFromTool, 0, baseFromTool, 0)
+  multiplyTransforms(baseFromTip, 0, tipFromTool, 0, baseFromTool, 0)
+}
+
+/** A loop, because TypedArray.set costs more than all of it. */
+function copyTransform(from: Float64Array, to: Float64Array): void {
+  for (let i = 0; i < TRANSFORM_SIZE; i++) to[i] = from[i]!
 }

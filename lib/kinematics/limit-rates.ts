@@ -14,16 +14,13 @@ export function limitRates(
   chain: Chain, work: Workspace, limits: RateLimits, weighted: boolean, previousRates: ArrayLike<number> | undefined, record: RateRecord,
 ): void {
   const { bounds, scaling } = work
-  record.saturated.fill(0)
-  if (limits.rates === 'report') {
-    scaling.scale = 1
-    scaling.secondaryScale = 1
-    addUp(record, 1, 1)
-    return
-  }
+  const within = addBoth(work.prepared.rate, limits.derating, record)
+  if (limits.rates === 'report') return
   checkLength(chain, limits.derating, 'deratings')
   checkLength(chain, limits.accelerations, 'accelerations')
   checkLength(chain, previousRates, 'previous rates')
+  // What most configurations of a batch need: nothing is bounded but by known rates, and all rates are within them.
+  if (within && limits.dt === undefined) return
   fillRateBounds(bounds, chain.joints, work.q, limits, previousRates)
   const kept = scaleToBounds(bounds, record.primaryRates, record.secondaryRates, scaling)
   if (limits.rates === 'saturate' && (!kept || scaling.scale < 1)) {
@@ -31,7 +28,7 @@ export function limitRates(
     const { rows, rank } = work.solved
     const best = saturateRates(rows, rank, record.primaryRates, bounds, weighted ? work.rootWeights : null, room)
     // Evenly slowed rates may be faster, where the secondary motion takes load off the joint that binds.
-    if (best >= 0 && (!kept || best > scaling.scale)) {
+    if (best >= 0 && (!kept || (best > scaling.scale && room.saturated.includes(1)))) {
       record.scale = best
       record.secondaryScale = work.solved.wished === 0 ? 1 : 0
       record.saturated.set(room.saturated)
@@ -42,6 +39,22 @@ export function limitRates(
   addUp(record, scaling.scale, scaling.secondaryScale)
   if (kept) clampRounding(work, record)
   else brake(work, record)
+}
+
+/** Fills the record with both motions whole; true where they are known to be within the rate limits, times one derating for all. */
+function addBoth(rate: Float64Array, derating: number | ArrayLike<number>, record: RateRecord): boolean {
+  const { rates, primaryRates, secondaryRates, saturated } = record
+  const part = typeof derating === 'number' ? derating : 0
+  let within = true
+  for (let j = 0; j < rate.length; j++) {
+    const sum = primaryRates[j]! + secondaryRates[j]! + 0
+    rates[j] = sum
+    saturated[j] = 0
+    if (!(Math.abs(sum) <= rate[j]! * part)) within = false
+  }
+  record.scale = 1
+  record.secondaryScale = 1
+  return within
 }
 
 function addUp(record: RateRecord, scale: number, secondaryScale: number): void {

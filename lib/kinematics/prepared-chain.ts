@@ -19,13 +19,17 @@ export interface PreparedChain {
   /** The coordinate that a motion follows. */
   readonly joint: Int32Array
   readonly multiplier: Float64Array
-  /** rad or m. */
+  /** rad or m; of a turn with the rest of the turn about z that belongs to its placement. */
   readonly offset: Float64Array
   readonly quarters: Int32Array
-  /** rad. */
+  /** rad, what each motion turns by at 0: a slide too turns by the rest of its placement, and no more. */
   readonly rest: Float64Array
+  /** Of each coordinate, rad/s or m/s; Infinity where it is not known. */
+  readonly rate: Float64Array
   /** Whether there is one motion for each coordinate, in order, with multiplier 1: then no column of a Jacobian is a sum. */
   readonly plain: boolean
+  /** Plain, and each motion a turn. */
+  readonly turning: boolean
 }
 
 /** A turn that is this near to whole quarters (rad) is meant to be whole. */
@@ -56,6 +60,7 @@ export function prepareChain(chain: Chain): PreparedChain {
       addTurn(i, last)
     }
   }
+  const plain = count === chain.joints.length && motions.every(({ joint, multiplier }, i) => joint === i && multiplier === 1)
   return {
     baseFromFirst: constants[0]!,
     lastFromTip: count === 0 ? identityTransform() : constants[count]!,
@@ -63,10 +68,12 @@ export function prepareChain(chain: Chain): PreparedChain {
     rotary: Uint8Array.from(motions, (motion) => (motion.rotary ? 1 : 0)),
     joint: Int32Array.from(motions, (motion) => motion.joint),
     multiplier: Float64Array.from(motions, (motion) => motion.multiplier),
-    offset: Float64Array.from(motions, (motion) => motion.offset),
+    offset: Float64Array.from(motions, (motion, i) => (motion.rotary ? motion.offset + rest[i]! : motion.offset)),
     quarters,
     rest,
-    plain: count === chain.joints.length && motions.every(({ joint, multiplier }, i) => joint === i && multiplier === 1),
+    rate: Float64Array.from(chain.joints, ({ rate }) => (rate !== null && rate > 0 ? rate : Number.POSITIVE_INFINITY)),
+    plain,
+    turning: plain && motions.every(({ rotary }) => rotary),
   }
 }
 

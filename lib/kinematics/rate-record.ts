@@ -14,17 +14,16 @@ export interface RateRecord {
   readonly saturated: Uint8Array
   scale: number
   secondaryScale: number
-  /** 6: what the tool does at `rates`, also outside the task. */
+  /** 6: what the tool does at `rates`, also outside the task. Not under detail 'rates', like all that follows. */
   readonly achievedTwist: Float64Array
   /** 6: achieved − asked; 0 outside the task. */
   readonly residual: Float64Array
-  /** 6; the first min(components, n) are those of the unscaled task Jacobian, descending. Not under detail 'rates'. */
+  /** 6; the first min(components, n) are those of the unscaled task Jacobian, descending. */
   readonly singularValues: Float64Array
-  /** Not under detail 'rates', like the singular values. */
   rank: number
   /** The largest λ; 0 where nothing is damped. */
   damping: number
-  /** Whether the pose was an easy one: of full rank, nothing damped, nothing lost and no singular value under 0.02. */
+  /** Whether the pose was an easy one: of full rank, nothing damped and so nothing lost. */
   easy: boolean
 }
 

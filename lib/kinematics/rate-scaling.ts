@@ -22,11 +22,11 @@ export function scaleToBounds(bounds: RateBounds, primary: Float64Array, seconda
   out.secondaryScale = 1
   if (keeps(bounds, primary, secondary, 1, 1)) return true
   const { lower, upper } = bounds
-  bounds.corners.set(UNIT_SQUARE)
+  for (let k = 0; k < UNIT_SQUARE.length; k++) bounds.corners[k] = UNIT_SQUARE[k]!
   let corners = UNIT_SQUARE.length / 2
   for (let i = 0; i < upper.length; i++) {
-    if (upper[i]! < Number.POSITIVE_INFINITY) corners = cut(bounds, corners, primary[i]!, secondary[i]!, upper[i]!)
-    if (lower[i]! > Number.NEGATIVE_INFINITY) corners = cut(bounds, corners, -primary[i]!, -secondary[i]!, -lower[i]!)
+    if (upper[i]! < Number.POSITIVE_INFINITY) corners = cut(bounds, corners, primary, secondary, i, 1)
+    if (lower[i]! > Number.NEGATIVE_INFINITY) corners = cut(bounds, corners, primary, secondary, i, -1)
   }
   out.scale = 0
   for (let k = 0; k < corners; k++) out.scale = Math.max(out.scale, bounds.corners[2 * k]!)
@@ -63,10 +63,13 @@ function takeOffRounding(bounds: RateBounds, primary: Float64Array, secondary: F
   out.secondaryScale = still ? 0 : secondaryScale
 }
 
-/** Leaves the part of a convex polygon where p·scale + s·secondaryScale <= limit, and returns its number of corners.
- *  Sutherland & Hodgman 1974. */
-function cut(bounds: RateBounds, corners: number, p: number, s: number, limit: number): number {
+/** Leaves the part of a convex polygon where joint i keeps its upper (side 1) or lower (−1) bound, p·scale + s·secondaryScale <= limit,
+ *  and returns its number of corners. Sutherland & Hodgman 1974. */
+function cut(bounds: RateBounds, corners: number, primary: Float64Array, secondary: Float64Array, i: number, side: 1 | -1): number {
   const { corners: from, cutCorners: to } = bounds
+  const p = side * primary[i]!
+  const s = side * secondary[i]!
+  const limit = side === 1 ? bounds.upper[i]! : -bounds.lower[i]!
   let outside = false
   for (let k = 0; k < corners; k++) outside ||= !(p * from[2 * k]! + s * from[2 * k + 1]! <= limit)
   if (!outside) return corners

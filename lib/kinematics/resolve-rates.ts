@@ -1,6 +1,7 @@
 import { dot } from '@/lib/math/dot'
 import { norm } from '@/lib/math/norm'
 import { decompose } from '@/lib/math/singular-values'
+import { triangleValues } from '@/lib/math/triangle-values'
 import type { Chain } from './chain'
 import type { Workspace } from './create-workspace'
 import { diagnose } from './diagnose'
@@ -10,7 +11,7 @@ import { limitRates } from './limit-rates'
 import { fillWish, needSingularValues } from './objectives'
 import type { Instant, RatePolicy } from './rate-policy'
 import { createRateRecord, type RateRecord } from './rate-record'
-import { projectSecondary, solvePrimary } from './solve-rates'
+import { projectSecondary, solveDampedOnly, solvePrimary } from './solve-rates'
 import { LINEAR_COMPONENTS, TWIST_SIZE } from './task'
 import { fillTaskJacobian } from './task-jacobian'
 
@@ -77,7 +78,7 @@ export function resolveRates(chain: Chain, work: Workspace, twist: ArrayLike<num
 const NO_INSTANT: Instant = Object.freeze({})
 
 /** The same into a record that is kept, allocating nothing where the pose is an easy one and the rates are within their limits.
- *  `detail` 'rates' leaves out the singular values and the rank, which are most of the cost. */
+ *  `detail` 'rates' leaves out the singular values, the rank and the achieved twist, which are most of the cost. */
 export function resolveRatesInto(
   chain: Chain, work: Workspace, twist: ArrayLike<number>, policy: RatePolicy, record: RateRecord,
   instant: Instant = NO_INSTANT, detail: 'all' | 'rates' = 'all',
@@ -92,16 +93,19 @@ export function resolveRatesInto(
   if (weighted) prepareWeights(work, jointWeights)
 
   const { solved } = work
-  solvePrimary(work, m, inverse, weighted, needSingularValues(secondary), solved)
+  const only = detail === 'rates' && !weighted && secondary.length === 0 && policy.limits.rates !== 'saturate'
+  if (!(only && solveDampedOnly(work, m, inverse, solved))) solvePrimary(work, m, inverse, weighted, needSingularValues(secondary), solved)
   record.easy = solved.easy
   record.rank = solved.rank
   record.damping = solved.damping
-  if (detail === 'all') {
-    if (solved.easy) decompose(work.taskJacobian, m, n, work.taskValues)
-    for (let k = 0; k < Math.min(m, n); k++) record.singularValues[k] = work.taskValues.values[k]!
+  if (detail === 'all') fillSingularValues(work, m, record)
+  if (secondary.length > 0) {
+    fillWish(work, task, solved.rank, secondary, work.secondary)
+    projectSecondary(work, solved, weighted)
+  } else {
+    for (let j = 0; j < n; j++) work.secondary[j] = 0
+    solved.wished = 0
   }
-  fillWish(work, task, solved.rank, secondary, work.secondary)
-  projectSecondary(work, solved, weighted)
   // Adding 0 turns −0 into 0, which is the same number and looks less odd on the wire.
   for (let j = 0; j < n; j++) {
     record.primaryRates[j] = work.primary[j]! + 0
@@ -109,6 +113,7 @@ export function resolveRatesInto(
   }
   limitRates(chain, work, policy.limits, weighted, instant.previousRates, record)
 
+  if (detail === 'rates') return
   for (let row = 0; row < TWIST_SIZE; row++) {
     let achieved = 0
     for (let j = 0; j < n; j++) achieved += whole[row * n + j]! * record.rates[j]!
@@ -119,6 +124,14 @@ export function resolveRatesInto(
     const row = task.rows[k]!
     record.residual[row] = record.achievedTwist[row]! - twist[row]!
   }
+}
+
+function fillSingularValues(work: Workspace, m: number, record: RateRecord): void {
+  if (work.solved.easy) {
+    if (triangleValues(work.lower, m, work.triangle, record.singularValues)) return
+    decompose(work.taskJacobian, m, work.q.length, work.taskValues)
+  }
+  for (let k = 0; k < Math.min(m, work.q.length); k++) record.singularValues[k] = work.taskValues.values[k]!
 }
 
 function leakOf(work: Workspace, m: number, record: RateRecord): number {

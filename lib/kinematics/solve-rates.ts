@@ -1,11 +1,13 @@
+import { dampedSix } from '@/lib/math/damped-six'
 import { dot } from '@/lib/math/dot'
-import { factorRows, leastSingularValue, solveLower } from '@/lib/math/lower-orthogonal'
+import { factorRows, leastSingularValue, solveLower, triangleNorm } from '@/lib/math/lower-orthogonal'
 import { norm } from '@/lib/math/norm'
 import { decompose } from '@/lib/math/singular-values'
 import type { Workspace } from './create-workspace'
 import { fillGains, rankTolerance, undampedFrom, type Inverse } from './inverse'
 import { dampedWeighted, factorWeighted, leastWeighted, projectWeighted } from './joint-weights'
-import { NEAR_SINGULAR, rankOf } from './measures'
+import { rankOf } from './measures'
+import { TWIST_SIZE } from './task'
 
 /** How the task Jacobian of a pose was solved. */
 export interface Solved {
@@ -13,7 +15,7 @@ export interface Solved {
   rows: Float64Array
   rank: number
   damping: number
-  /** Of full rank, nothing damped, no singular value under 0.02: then work.taskValues is not filled. */
+  /** Of full rank and nothing damped: then work.taskValues is not filled. */
   easy: boolean
   /** The norm of what the objectives ask for, before projection. */
   wished: number
@@ -56,21 +58,35 @@ export function solvePrimary(work: Workspace, m: number, inverse: Inverse, weigh
   }
 }
 
+/** work.primary for a damped inverse and a task of six components, where nothing else is asked: no rank, no null space, no singular values.
+ *  False, and nothing filled, for anything else or where the damping is too small for it. */
+export function solveDampedOnly(work: Workspace, m: number, inverse: Inverse, solved: Solved): boolean {
+  if (m !== TWIST_SIZE || inverse.method !== 'damped' || inverse.damping === 0) return false
+  if (!dampedSix(work.taskJacobian, work.q.length, inverse.damping, work.asked, work.primary)) return false
+  solved.easy = false
+  solved.rank = 0
+  solved.damping = inverse.damping
+  return true
+}
+
+/** Below this the squares that the easy way forms underflow. */
+const SMALLEST = 1e-100
+
 /** Factors the task Jacobian into work.lower and work.rows, and says whether the pose is proved to be easy. */
 function isEasy(work: Workspace, m: number, inverse: Inverse): boolean {
   const n = work.q.length
-  const floor = Math.max(NEAR_SINGULAR, undampedFrom(inverse))
+  const floor = undampedFrom(inverse)
   if (m > n || floor === Number.POSITIVE_INFINITY) return false
   if (!factorRows(work.taskJacobian, m, n, work.rows, work.lower)) return false
-  const least = leastSingularValue(work.lower, m, work.coordinates)
-  // Written so that a number that is not finite is not easy. The Frobenius norm is at least the largest singular value.
-  return least >= floor && least > rankTolerance(inverse) * norm(work.lower, 0, m * m)
+  const least = leastSingularValue(work.lower, m, work.square)
+  // Written so that a number that is not finite is not easy.
+  return least >= Math.max(floor, SMALLEST) && least > rankTolerance(inverse) * triangleNorm(work.lower, m)
 }
 
 /** work.primary = Σ byRow · row over the first `count` rows. */
 function addUp({ primary, byRow }: Workspace, rows: Float64Array, count: number): void {
   const n = primary.length
-  primary.fill(0)
+  for (let j = 0; j < n; j++) primary[j] = 0
   for (let k = 0; k < count; k++) {
     const amount = byRow[k]!
     for (let j = 0; j < n; j++) primary[j]! += amount * rows[k * n + j]!
@@ -81,15 +97,15 @@ function addUp({ primary, byRow }: Workspace, rows: Float64Array, count: number)
  *  a rate of 1e-17, and a rate limit could then depend on its sign. */
 const PROJECTION_ROUNDING = 64 * Number.EPSILON
 
-/** work.secondary = (I − J⁺J) · work.secondary, from the undamped inverse: a damped one would leak into the task. Twice, so that
- *  what rounding leaves of the first pass is taken out too. */
+/** work.secondary = (I − J⁺J) · work.secondary, from the undamped inverse: a damped one would leak into the task. Where the rows are not
+ *  orthonormal to the last bits, twice, so that what rounding leaves of the first pass is taken out too. */
 export function projectSecondary(work: Workspace, solved: Solved, weighted: boolean): void {
   const { secondary } = work
   const { rows, rank } = solved
   solved.wished = norm(secondary)
   if (solved.wished === 0) return
   const rounding = PROJECTION_ROUNDING * solved.wished
-  for (let pass = 0; pass < 2; pass++) {
+  for (let pass = solved.easy && !weighted ? 1 : 0; pass < 2; pass++) {
     if (weighted) projectWeighted(work, rank, secondary)
     else takeOut(rows, rank, secondary)
   }

@@ -2,7 +2,7 @@ import { decompose } from '@/lib/math/singular-values'
 import type { Chain } from './chain'
 import type { Workspace } from './create-workspace'
 import { jacobian } from './jacobian'
-import { LINEAR_COMPONENTS, type Task } from './task'
+import { LINEAR_COMPONENTS, TWIST_SIZE, type Task } from './task'
 
 /** Fills work.taskJacobian (components x n) at the pose in `work` with the rows that the task asks for, in its frame, linear rows
  *  divided by `characteristicLength` (m; 1 leaves SI). Returns the whole Jacobian in that frame, undivided. */
@@ -10,10 +10,16 @@ export function fillTaskJacobian(chain: Chain, work: Workspace, task: Task, char
   const n = chain.joints.length
   const whole = jacobian(chain, work, task.frame)
   const { rows } = task
+  if (rows.length === TWIST_SIZE && characteristicLength === 1) {
+    for (let i = 0; i < whole.length; i++) work.taskJacobian[i] = whole[i]!
+    return whole
+  }
   for (let k = 0; k < rows.length; k++) {
     const row = rows[k]!
     const divisor = row < LINEAR_COMPONENTS ? characteristicLength : 1
-    for (let j = 0; j < n; j++) work.taskJacobian[k * n + j] = whole[row * n + j]! / divisor
+    const to = work.taskJacobian
+    if (divisor === 1) for (let j = 0; j < n; j++) to[k * n + j] = whole[row * n + j]!
+    else for (let j = 0; j < n; j++) to[k * n + j] = whole[row * n + j]! / divisor
   }
   return whole
 }

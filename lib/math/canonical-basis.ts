@@ -1,5 +1,3 @@
-import { dot } from './dot'
-
 /** A column counts as a pivot from this part of the largest on. Not 0.5: exactly half is met at everyday poses, and rounding
  *  would decide. */
 const PIVOT_PART = 0.499
@@ -16,35 +14,57 @@ const WORN = 0.5
  *  dropping column p from the rows and making them orthonormal again, Q ← Q·(I − qqᵀ)^(−½) with q = Q·eₚ, leaves those that
  *  describe the next one. */
 export function canonicalBasis(taken: Float64Array, n: number, r: number): number[][] {
+  const vectors = new Float64Array((n - r) * n)
+  fillCanonicalBasis(taken, n, r, createBasisRoom(n, r), vectors)
+  return Array.from({ length: n - r }, (_vector, k) => Array.from(vectors.subarray(k * n, (k + 1) * n)))
+}
+
+/** Room to find a canonical basis in. */
+export interface BasisRoom {
+  readonly rows: Float64Array
+  readonly sizes: Float64Array
+  readonly left: Uint8Array
+  readonly q: Float64Array
+}
+
+/** Room for n coordinates of which up to r directions are taken. */
+export function createBasisRoom(n: number, r: number): BasisRoom {
+  return { rows: new Float64Array(n * r), sizes: new Float64Array(n), left: new Uint8Array(n), q: new Float64Array(r) }
+}
+
+/** The same into n − r rows of n numbers of `out`, allocating nothing. */
+export function fillCanonicalBasis(taken: Float64Array, n: number, r: number, room: BasisRoom, out: Float64Array): void {
+  const { rows, sizes, left, q } = room
   // A column of `rows` is kept together in memory: r numbers for each of the n coordinates.
-  const rows = new Float64Array(n * r)
-  for (let k = 0; k < r; k++) for (let i = 0; i < n; i++) rows[i * r + k] = taken[k * n + i]!
-  const left = new Uint8Array(n).fill(1)
-  const q = new Float64Array(r)
+  for (let i = 0; i < n; i++) {
+    left[i] = 1
+    for (let k = 0; k < r; k++) rows[i * r + k] = taken[k * n + i]!
+  }
   let wear = 1
-  return Array.from({ length: n - r }, () => {
-    const pivot = firstLargeColumn(rows, left, n, r)
+  for (let found = 0; found < n - r; found++) {
+    const pivot = firstLargeColumn(rows, sizes, left, n, r)
     left[pivot] = 0
     for (let k = 0; k < r; k++) q[k] = rows[pivot * r + k]!
-    const squared = dot(q, 0, q, 0, r)
-    const length = Math.sqrt(1 - squared)
+    const length = Math.sqrt(sizes[pivot]!)
     // (1/length − 1)/|q|², without the cancellation for a small q.
     const widen = 1 / (length * (1 + length))
-    const vector = new Array<number>(n).fill(0)
-    vector[pivot] = length
+    const at = found * n
     for (let i = 0; i < n; i++) {
+      out[at + i] = 0
       if (left[i] === 0) continue
-      const along = dot(rows, i * r, q, 0, r)
-      vector[i] = 0 - along / length
-      for (let k = 0; k < r; k++) rows[i * r + k]! += widen * along * q[k]!
+      let along = 0
+      for (let k = 0; k < r; k++) along += rows[i * r + k]! * q[k]!
+      out[at + i] = 0 - along / length
+      // After the last vector nobody asks for the rest.
+      if (found < n - r - 1) for (let k = 0; k < r; k++) rows[i * r + k]! += widen * along * q[k]!
     }
+    out[at + pivot] = length
     wear *= length
     if (wear < WORN) {
       makeOrthonormal(rows, left, n, r)
       wear = 1
     }
-    return vector
-  })
+  }
 }
 
 /** Gram-Schmidt on the r rows, over the coordinates that are left. */
@@ -63,11 +83,18 @@ function makeOrthonormal(rows: Float64Array, left: Uint8Array, n: number, r: num
   }
 }
 
-function firstLargeColumn(rows: Float64Array, left: Uint8Array, n: number, r: number): number {
+/** Fills `sizes` with the squared column norms that remain, and gives the first that is large enough. */
+function firstLargeColumn(rows: Float64Array, sizes: Float64Array, left: Uint8Array, n: number, r: number): number {
   let largest = 0
-  for (let i = 0; i < n; i++) if (left[i] === 1) largest = Math.max(largest, 1 - dot(rows, i * r, rows, i * r, r))
+  for (let i = 0; i < n; i++) {
+    if (left[i] === 0) continue
+    let size = 1
+    for (let k = 0; k < r; k++) size -= rows[i * r + k]! * rows[i * r + k]!
+    sizes[i] = size
+    if (size > largest) largest = size
+  }
   const threshold = PIVOT_PART * PIVOT_PART * largest
   let pivot = 0
-  while (left[pivot] === 0 || 1 - dot(rows, pivot * r, rows, pivot * r, r) < threshold) pivot++
+  while (left[pivot] === 0 || sizes[pivot]! < threshold) pivot++
   return pivot
 }

@@ -1,8 +1,6 @@
-import { dot } from './dot'
-
-/** A row that keeps less than this part of its square when the rows before are taken out is cleaned once more: what rounding left in
- *  it has grown against it. Daniel, Gragg, Kaufman & Stewart 1976. */
-const CLEANED_AGAIN = 0.5
+/** A row that keeps less than this part of its square (a tenth of its length) when the rows before are taken out is cleaned once more:
+ *  what rounding left in it has grown against it. Daniel, Gragg, Kaufman & Stewart 1976. */
+const CLEANED_AGAIN = 0.01
 
 /** A = L·Q of the row-major m x n matrix `a`, m <= n, by Gram-Schmidt on its rows: `rows` (m x n) receives the orthonormal rows of Q,
  *  `lower` (m x m) the lower triangle of L, diagonal above 0. False, and unfinished, where a row lies wholly in those before. */
@@ -16,10 +14,12 @@ export function factorRows(a: Float64Array, m: number, n: number, rows: Float64A
       before += entry * entry
     }
     for (let i = 0; i < k; i++) lower[k * m + i] = 0
-    let after = takeOut(rows, at, k, n, lower, k * m)
+    takeOut(rows, at, k, n, lower, k * m)
+    let after = lower[k * m + k]!
     if (after < CLEANED_AGAIN * before) {
       before = after
-      after = takeOut(rows, at, k, n, lower, k * m)
+      takeOut(rows, at, k, n, lower, k * m)
+      after = lower[k * m + k]!
       if (!(after >= CLEANED_AGAIN * before)) return false
     }
     const length = Math.sqrt(after)
@@ -31,15 +31,25 @@ export function factorRows(a: Float64Array, m: number, n: number, rows: Float64A
   return true
 }
 
-/** Takes the first k rows out of the one at `at`, adds their parts to `lower` and returns the square of what is left. */
-function takeOut(rows: Float64Array, at: number, k: number, n: number, lower: Float64Array, atLower: number): number {
+/** Takes the first k rows out of the one at `at`, adds their parts to `lower` and writes the square of what is left behind them: a number
+ *  that is returned would be put on the heap. */
+function takeOut(rows: Float64Array, at: number, k: number, n: number, lower: Float64Array, atLower: number): void {
   for (let i = 0; i < k; i++) {
-    let along = 0
-    for (let j = 0; j < n; j++) along += rows[at + j]! * rows[i * n + j]!
-    for (let j = 0; j < n; j++) rows[at + j]! -= along * rows[i * n + j]!
+    const row = i * n
+    // Two sums, so that one addition need not wait for the other.
+    let even = 0, odd = 0, j = 0
+    for (; j + 1 < n; j += 2) {
+      even += rows[at + j]! * rows[row + j]!
+      odd += rows[at + j + 1]! * rows[row + j + 1]!
+    }
+    if (j < n) even += rows[at + j]! * rows[row + j]!
+    const along = even + odd
+    for (j = 0; j < n; j++) rows[at + j]! -= along * rows[row + j]!
     lower[atLower + i]! += along
   }
-  return dot(rows, at, rows, at, n)
+  let squares = 0
+  for (let j = 0; j < n; j++) squares += rows[at + j]! * rows[at + j]!
+  lower[atLower + k] = squares
 }
 
 /** x of L·x = b for a lower triangle (m x m); `x` may be `b`. */
@@ -51,16 +61,24 @@ export function solveLower(lower: Float64Array, m: number, b: Float64Array, x: F
   }
 }
 
+/** The Frobenius norm of a lower triangle (m x m), which is at least its largest singular value. */
+export function triangleNorm(lower: Float64Array, m: number): number {
+  let squares = 0
+  for (let i = 0; i < m; i++) for (let k = 0; k <= i; k++) squares += lower[i * m + k]! * lower[i * m + k]!
+  return Math.sqrt(squares)
+}
+
 /** At most the smallest singular value of a lower triangle (m x m), and at least a part 1/√m of it: one over the Frobenius norm of its
- *  inverse. */
+ *  inverse. scratch: 2·m numbers. */
 export function leastSingularValue(lower: Float64Array, m: number, scratch: Float64Array): number {
   let squares = 0
-  // Columns of the inverse one after the other, in the rows of scratch.
+  for (let i = 0; i < m; i++) scratch[m + i] = 1 / lower[i * m + i]!
+  // Columns of the inverse one after the other.
   for (let c = 0; c < m; c++) {
     for (let i = c; i < m; i++) {
       let sum = i === c ? 1 : 0
       for (let k = c; k < i; k++) sum -= lower[i * m + k]! * scratch[k]!
-      const entry = sum / lower[i * m + i]!
+      const entry = sum * scratch[m + i]!
       scratch[i] = entry
       squares += entry * entry
     }

@@ -30,9 +30,10 @@ export function sinesAndCosines(angles: Float64Array, quarters: Int32Array, coun
     const s = y - y * z * (S3 - z * S5 + z2 * (S7 - z * S9) + z4 * (S11 - z * S13 + z2 * S15))
     const c = 1 - z * (0.5 - z * C4 + z2 * (C6 - z * C8) + z4 * (C10 - z * C12 + z2 * (C14 - z * C16)))
     const turns = (k + quarters[i]!) | 0
-    const odd = (turns & 1) === 1
-    out[2 * i] = (odd ? c : s) * (1 - (turns & 2))
-    out[2 * i + 1] = (odd ? s : c) * (1 - ((turns + 1) & 2))
+    // An odd number of quarters exchanges both; no branch, because which way it goes is as good as random.
+    const odd = turns & 1
+    out[2 * i + odd] = s * (1 - ((turns + 1) & 2))
+    out[2 * i + 1 - odd] = c * (1 - (turns & 2))
   }
 }
 

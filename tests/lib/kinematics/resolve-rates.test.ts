@@ -5,6 +5,7 @@ import type { Chain } from '@/lib/kinematics/chain'
 import type { Inverse } from '@/lib/kinematics/inverse'
 import { jacobian } from '@/lib/kinematics/jacobian'
 import type { Objective } from '@/lib/kinematics/objectives'
+import type { RateLimits } from '@/lib/kinematics/rate-bounds'
 import { TWIST_COMPONENTS, createTask } from '@/lib/kinematics/task'
 import { arm, at, golden, GOLDEN_POSE, planar, rad, randomArm, randomPose, sixAxis, transform } from './arms'
 import { askRates, EXACT, flat, PLANE } from './ask-rates'
@@ -217,7 +218,16 @@ describe('resolveRates, at large', () => {
       fc.record({ method: fc.constant('truncated' as const), tolerance: positive }),
       fc.record({ method: fc.constant('damped' as const), damping: positive }),
       fc.record({ method: fc.constant('adaptive-damped' as const), threshold: positive, maxDamping: positive }),
+      fc.record({ method: fc.constant('filtered' as const), threshold: positive, damping: positive }),
     )
+    const weight = fc.oneof(fc.double({ min: 1e-6, max: 1e6, noNaN: true }), fc.constantFrom(1, 1e-6, 1e6))
+    const acceleration = fc.oneof(fc.constant(null), positive)
+    const joints = fc.record({
+      jointWeights: fc.option(fc.array(weight, { minLength: 7, maxLength: 7 }), { nil: undefined }),
+      accelerations: fc.array(acceleration, { minLength: 7, maxLength: 7 }),
+      previousRates: fc.option(fc.array(number, { minLength: 7, maxLength: 7 }), { nil: undefined }),
+      dt: fc.option(fc.constantFrom(1e-9, 0.01, 1e9), { nil: undefined }),
+    })
     const seven = fc.array(number, { minLength: 7, maxLength: 7 })
     const chain = golden({ lower: -2, upper: 2, rate: 1 })
     const sliding = arm([
@@ -238,20 +248,26 @@ describe('resolveRates, at large', () => {
         seven,
         number,
         inverse,
-        fc.constantFrom('scale', 'report'),
-        (first, q, twist, posture, gain, how, rates) => {
+        fc.constantFrom('scale', 'saturate', 'report'),
+        joints,
+        (first, q, twist, posture, gain, how, rates, { jointWeights, accelerations, previousRates, dt }) => {
           const secondary: Objective[] = [
             { objective: 'posture', posture, gain },
             { objective: 'mid-range', gain },
+            { objective: 'manipulability', gain },
           ]
           const outcome = askRates(first ? chain : sliding, q, twist, {
             inverse: how,
             secondary,
-            limits: { rates: rates as 'scale' | 'report', derating: 0.5 },
+            limits: { rates: rates as RateLimits['rates'], derating: 0.5, accelerations, ...(dt === undefined ? {} : { dt }) },
+            ...(jointWeights === undefined ? {} : { jointWeights }),
+            ...(previousRates === undefined ? {} : { previousRates }),
           })
-          const { diagnosis, ...numbers } = outcome
+          const { diagnosis, saturated, ...numbers } = outcome
           expect(Object.values(numbers).flat().every(Number.isFinite), JSON.stringify(outcome)).toBe(true)
           expect(diagnosis.flatMap(({ direction }) => direction ?? []).every(Number.isFinite)).toBe(true)
+          // Bounds that exclude standing still are met by clamping the last bits.
+          if (saturated.length > 0 || previousRates !== undefined) return
           expect(outcome.rates).toEqual(
             outcome.primaryRates.map((rate, i) => outcome.scale * rate + outcome.secondaryScale * outcome.secondaryRates[i]! + 0),
           )
@@ -277,6 +293,41 @@ describe('resolveRates, at large', () => {
         outcome.rates.forEach((value, i) => expect(Math.abs(value)).toBeLessThanOrEqual(chain.joints[i]!.rate ?? Number.POSITIVE_INFINITY))
       }),
       { seed: 5, numRuns: 150 },
+    )
+  })
+
+  it('leaks less than 1e-12 of its secondary motion into a task of full rank, and reports what it leaks below that', () => {
+    fc.assert(
+      fc.property(fc.integer({ min: 1, max: 1e6 }), fc.constantFrom(undefined, [1, 4, 2, 0.5, 3, 1, 2]), (seed, jointWeights) => {
+        const chain = golden()
+        const q = randomPose(chain, seed)
+        const secondary: Objective[] = [{ objective: 'posture', posture: q.map((value, i) => value + ((i % 3) - 1)), gain: 1 }]
+        const { leak, rank } = askRates(chain, q, [0.1, 0.2, 0.3, 0.1, 0.2, 0.3], { secondary, ...(jointWeights === undefined ? {} : { jointWeights }) })
+        expect(rank).toBe(6)
+        expect(leak).toBeLessThan(1e-12)
+      }),
+      { seed: 2, numRuns: 300 },
+    )
+    const q = rad(30, 0.05, 0.05)
+    const secondary: Objective[] = [{ objective: 'posture', posture: q.map((value, i) => value + [1, -1, 1][i]!), gain: 1 }]
+    expect(askRates(threeR, q, flat(0, 0), { task: PLANE, inverse: { method: 'truncated', tolerance: 1e-2 }, secondary }).leak).toBeCloseTo(3.74e-4, 6)
+  })
+
+  it('gives the rates of the triangular and of the singular value way alike, to 1e-14 times the condition number', () => {
+    fc.assert(
+      fc.property(fc.integer({ min: 1, max: 1e6 }), (seed) => {
+        const chain = golden()
+        const q = randomPose(chain, seed)
+        const twist = [0.1, -0.2, 0.3, 0.2, 0.1, -0.3]
+        const posture: Objective = { objective: 'posture', posture: [0, 0, 0, 1, 0, 1, 0], gain: 1 }
+        const easy = askRates(chain, q, twist, { inverse: EXACT, secondary: [posture] })
+        // An objective of gain 0 that looks at singular values sends the pose the long way.
+        const long = askRates(chain, q, twist, { inverse: EXACT, secondary: [posture, { objective: 'manipulability', gain: 0 }] })
+        const condition = easy.singularValues[0]! / easy.singularValues[5]!
+        expectClose(easy.rates, long.rates, 1e-14 * condition * Math.max(1, ...long.rates.map(Math.abs)))
+        expectClose(easy.singularValues, long.singularValues, 1e-14 * long.singularValues[0]!)
+      }),
+      { seed: 3, numRuns: 400 },
     )
   })
 

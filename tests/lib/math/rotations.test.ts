@@ -185,3 +185,18 @@ describe('invertTransform', () => {
     expectClose(Array.from(nothing), Array.from(identityTransform()), 15)
   })
 })
+
+describe('roll, pitch and yaw', () => {
+  it('turn at the angular velocity that the analytic Jacobian gives for their rates (METHODS 3)', () => {
+    const at = (t: number) => transformOfRollPitchYaw(origin, [0.1 + 0.4 * t, 0.2 - 0.5 * t, 0.3 + 0.6 * t])
+    const back = identityTransform()
+    const turned = identityTransform()
+    const step = 1e-6
+    invertTransform(at(-step), back)
+    multiplyTransforms(at(step), 0, back, 0, turned, 0)
+    const [cp, cy, sp, sy] = [Math.cos(0.2), Math.cos(0.3), Math.sin(0.2), Math.sin(0.3)]
+    const closed = [cy * cp * 0.4 - sy * -0.5, sy * cp * 0.4 + cy * -0.5, -sp * 0.4 + 0.6]
+    expectClose(closed, [0.5222774488, -0.3618164535, 0.5205322677], 9)
+    expectClose(rotationVectorOf(turned).map((part) => part / (2 * step)), closed, 8)
+  })
+})
