@@ -1,10 +1,13 @@
 const SOURCES = [
   ['Angeles and López-Cajún 1992', 'Kinematic isotropy and the conditioning index of serial robotic manipulators. International Journal of Robotics Research 11(6), 560–571'],
   ['Chiaverini, Siciliano and Egeland 1994', 'Review of the damped least-squares inverse kinematics. IEEE Transactions on Control Systems Technology 2(2), 123–134'],
+  ['Flacco, De Luca and Khatib 2015', 'Control of redundant robots under hard joint constraints: saturation in the null space. IEEE Transactions on Robotics 31(3), 637–654'],
   ['Klein and Huang 1983', 'Review of pseudoinverse control for use with kinematically redundant manipulators. IEEE Transactions on Systems, Man, and Cybernetics 13(2), 245–250'],
   ['Liégeois 1977', 'Automatic supervisory control of the configuration and behavior of multibody mechanisms. IEEE Transactions on Systems, Man, and Cybernetics 7(12), 868–871'],
+  ['Maciejewski and Klein 1988', 'Numerical filtering for the operation of robotic manipulators through kinematically singular configurations. Journal of Robotic Systems 5(6), 527–552'],
   ['Nakamura and Hanafusa 1986', 'Inverse kinematic solutions with singularity robustness. ASME Journal of Dynamic Systems, Measurement, and Control 108(3), 163–171'],
   ['Salisbury and Craig 1982', 'Articulated hands: force control and kinematic issues. International Journal of Robotics Research 1(1), 4–17'],
+  ['Schönemann 1966', 'A generalized solution of the orthogonal Procrustes problem. Psychometrika 31(1), 1–10'],
   ['Siciliano, Sciavicco, Villani and Oriolo 2009', 'Robotics: Modelling, Planning and Control. Springer'],
   ['Wampler 1986', 'Manipulator inverse kinematic solutions based on vector formulations and damped least-squares methods. IEEE Transactions on Systems, Man, and Cybernetics 16(1), 93–101'],
   ['Whitney 1969', 'Resolved motion rate control of manipulators and human prostheses. IEEE Transactions on Man-Machine Systems 10(2), 47–53'],

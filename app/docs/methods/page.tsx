@@ -58,6 +58,10 @@ J(i) = [ z ; 0 ]              prismatic`}</Formula>
         rounding would then decide.
       </p>
       <p>
+        Along a path even that basis may turn. <code>alignTo</code> takes a basis, usually the one before: the first result is turned to it, and each further
+        result to its predecessor, by the rotation within the null space that brings the columns nearest (orthogonal Procrustes, Schönemann 1966).
+      </p>
+      <p>
         Directions of the tool that no joint rates produce are answered as lost, by the same rule. A lost direction is <em>structural</em> when the chain can
         produce it at no pose: it is lost at each of 32 seeded configurations.
       </p>
@@ -65,12 +69,13 @@ J(i) = [ z ; 0 ]              prismatic`}</Formula>
       <h2 id="inverse">The inverse of a task</h2>
       <p>
         Rates that give the asked twist with the least effort (Whitney 1969) are <code>q̇ = J⁺v</code>. Near a singular pose they grow without bound, and
-        the three inverses differ in what they do about it. All decide on the Jacobian in SI, not divided by a characteristic length, so that what is
+        the inverses differ in what they do about it. All decide on the Jacobian in SI, not divided by a characteristic length, so that what is
         reported is what decided.
       </p>
       <Formula>{`truncated         q̇ = Σ (uᵀv / σ) w    over σ > tolerance · σ₁
 damped            q̇ = Σ σ / (σ² + λ²) (uᵀv) w
-adaptive-damped   λ² = (1 − (σₘ/ε)²) λmax²   where σₘ < ε, else 0`}</Formula>
+adaptive-damped   λ² = (1 − (σₘ/ε)²) λmax²   where σₘ < ε, else 0
+filtered          λ of its own for each direction with σ < ε, 0 for the others`}</Formula>
       <p>
         Damping bounds the rates by <code>|v| / 2λ</code> and pays with accuracy: of the motion along a singular direction, the part{' '}
         <code>λ² / (σ² + λ²)</code> is lost (Nakamura and Hanafusa 1986; Wampler 1986). The adaptive form damps only where the smallest singular value is
@@ -78,12 +83,22 @@ adaptive-damped   λ² = (1 − (σₘ/ε)²) λmax²   where σₘ < ε, else 0
         and <code>λmax</code> = 0.05. What was really achieved is in <code>achievedTwist</code> and <code>residual</code>.
       </p>
 
+      <p>
+        The filtered form damps only the directions that vanish and leaves the others exact (Maciejewski and Klein 1988).
+      </p>
+      <p>
+        With <code>jointWeights</code> the least effort is measured as <code>q̇ᵀWq̇</code>: a joint with a large weight moves less. The projector then belongs
+        to the weighted inverse and is oblique:
+      </p>
+      <Formula>{`J_W⁺ = W⁻¹Jᵀ (J W⁻¹ Jᵀ)⁻¹        N = I − J_W⁺ J`}</Formula>
+
       <h2 id="objectives">Spending spare freedom</h2>
       <p>A wish for the joints is projected into the null space, so that the task does not feel it (Liégeois 1977):</p>
       <Formula>{`q̇ = J⁺v + N q̇₀
 
 posture      q̇₀ = gain · (posture − q)
-mid-range    q̇₀ = −gain / n · (q − middle) / range²`}</Formula>
+mid-range    q̇₀ = −gain / n · (q − middle) / range²
+manipulability  q̇₀ = gain · ∂w/∂q,   ∂w/∂qᵢ = w · tr(∂J/∂qᵢ · J⁺)`}</Formula>
       <p>
         A posture is approached the short way round on continuous joints. The second is the joint-range objective of Siciliano and others 2009, section 3.5; a joint without both limits takes no part. The projector always
         comes from the undamped inverse: one made of a damped inverse would leak into the task.
@@ -99,13 +114,33 @@ mid-range    q̇₀ = −gain / n · (q − middle) / range²`}</Formula>
         largest <code>secondaryScale</code>. Spare freedom is given up before the task slows down, and where it helps at the joint that binds it is kept. A
         rate limit that the file does not give is never used. With <code>report</code> nothing is scaled.
       </p>
+      <p>
+        With <code>saturate</code> a joint that would be too fast is held at its limit, and the others do its part of the task as long as spare freedom
+        allows; only then is the task slowed (saturation in the null space: Flacco, De Luca and Khatib 2015). The order of sacrifice is: the objectives,
+        then spare freedom, then speed. With a period <code>dt</code> the position limits count as well, so that a joint can always brake in time with its
+        acceleration limit <code>A</code>, period by period, for the distance <code>d</code> that is left:
+      </p>
+      <Formula>{`r = d / (A dt²)     m = ⌊(√(1 + 8r) − 1) / 2⌋
+rate ≤ min( limit, A dt (r + m (m + 1) / 2) / (m + 1) )`}</Formula>
+      <p>
+        With <code>previousRates</code> no rate changes by more than <code>A dt</code>. Where these exclude each other, position wins, then the slowing down.
+        A motion back inside a limit is never refused.
+      </p>
 
       <h2 id="closed-loop">Closed loop</h2>
       <p>Open loop, small errors add up. A reference pose with gains works them off (Siciliano and others 2009, section 3.7):</p>
       <Formula>{`v = v(reference) + [ Kp (p(reference) − p) ; Ko · ϑ r ]`}</Formula>
       <p>
         <code>ϑ r</code> is the rotation vector from the tool to the reference, the short way round. Called with a period of <code>dt</code>, the loop is
-        stable for <code>0 &lt; K · dt &lt; 2</code>.
+        stable for <code>0 &lt; K · dt &lt; 2</code>; beyond that the diagnosis says <code>gain-too-high</code>.
+      </p>
+
+      <h2 id="inverse-kinematics">Inverse kinematics</h2>
+      <p>
+        A configuration is looked for by damped steps that keep the joint limits, from the seed or the middle of the ranges, then from points of an even
+        sequence over the ranges: the same question has the same answer everywhere. What is found is the pose within the tolerances, or the best that was
+        met and why no better: <code>unreachable</code>, <code>at-limits</code> or <code>stalled</code>. Spare freedom is then spent on the objectives. The
+        motion from one configuration to another is not examined.
       </p>
 
       <h2 id="diagnosis">Diagnosis</h2>
