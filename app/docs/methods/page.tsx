@@ -96,8 +96,8 @@ filtered          λ of its own for each direction with σ < ε, 0 for the other
       <p>A wish for the joints is projected into the null space, so that the task does not feel it (Liégeois 1977):</p>
       <Formula>{`q̇ = J⁺v + N q̇₀
 
-posture      q̇₀ = gain · (posture − q)
-mid-range    q̇₀ = −gain / n · (q − middle) / range²
+posture         q̇₀ = gain · (posture − q)
+mid-range       q̇₀ = −gain / n · (q − middle) / range²
 manipulability  q̇₀ = gain · ∂w/∂q,   ∂w/∂qᵢ = w · tr(∂J/∂qᵢ · J⁺)`}</Formula>
       <p>
         A posture is approached the short way round on continuous joints. The second is the joint-range objective of Siciliano and others 2009, section 3.5; a joint without both limits takes no part. The projector always
