@@ -3,7 +3,7 @@ import type { UseCase } from '@/lib/access/use-case'
 import type { InverseKinematicsResult } from '@/lib/contract/kinematic-answers'
 import { INVERSE_KINEMATICS_FIELDS } from '@/lib/contract/kinematic-questions'
 import { fail } from '@/lib/errors'
-import { finishInSlices } from '@/lib/in-slices'
+import { finishInSlices, inSlices } from '@/lib/in-slices'
 import { inverseKinematicsInSteps } from '@/lib/kinematics/inverse-kinematics'
 import { DEFAULT_SEARCH, type FoundPose, type PoseSearch } from '@/lib/kinematics/pose-search'
 import { begin, checkAnswerSize, readPose, taskOf } from './begin'
@@ -30,10 +30,12 @@ function* withinBudget<T>(steps: Generator<void, T>): Generator<void, T> {
 export const answerInverseKinematics: UseCase<'inverseKinematics'> = async (caller, { at, body }) => {
   const begun = await begin(caller, at, body)
   const { chain, work, tipFromTool, kinds, read, write, envelope } = begun
-  const targets = body.targets.map((target, i) => readPose(read, target, `/targets/${i}`))
+  const targets: Float64Array[] = []
+  await inSlices(body.targets.length, (i) => targets.push(readPose(read, body.targets[i]!, `/targets/${i}`)))
   const seeds = body.seeds?.map((seed, i) => read.list(seed, kinds, `/seeds/${i}`, 'the chain'))
-  if (seeds !== undefined) read.matched(seeds.length, targets.length, '/seeds')
-  const tolerance = (value: number | undefined, kind: 'length' | 'angle', pointer: string) => value && read.number(value, kind, pointer)
+  if (seeds !== undefined) read.matched(seeds.length, targets.length, '/seeds', 'targets')
+  const tolerance = (value: number | undefined, kind: 'length' | 'angle', pointer: string) =>
+    value === undefined ? undefined : read.number(value, kind, pointer)
   const search: PoseSearch = {
     ...DEFAULT_SEARCH,
     task: taskOf(body.task),
@@ -45,7 +47,7 @@ export const answerInverseKinematics: UseCase<'inverseKinematics'> = async (call
   }
   read.finish()
   const wanted = includedFields(INVERSE_KINEMATICS_FIELDS, body.include)
-  checkAnswerSize(targets.length, NUMBERS_BESIDE + kinds.length)
+  checkAnswerSize(targets.length, NUMBERS_BESIDE + (wanted.has('configuration') ? kinds.length : 0), 'targets')
 
   const results: z.infer<typeof InverseKinematicsResult>[] = []
   const present = (found: FoundPose) =>

@@ -12,6 +12,7 @@ import type { RateLimits } from '@/lib/kinematics/rate-bounds'
 import type { RatePolicy } from '@/lib/kinematics/rate-policy'
 import { resolveRates } from '@/lib/kinematics/resolve-rates'
 import { structuralLossInSteps } from '@/lib/kinematics/structural-loss'
+import { LINEAR_COMPONENTS, type Task } from '@/lib/kinematics/task'
 import { begin, type Begun, checkAnswerSize, readPose, taskOf } from './begin'
 import { includedFields, pick } from './included'
 import { readObjectives } from './read-objectives'
@@ -64,14 +65,17 @@ const readLimits = (limits: JointRatesQuestion['limits'], { read, kinds }: Begun
   ...(limits?.dt !== undefined && { dt: limits.dt }),
 })
 
+/** The larger of the gains that the task has components for. */
+const largestGain = ({ positionGain, orientationGain }: Reference, { rows }: Task): number =>
+  Math.max(...rows.map((row) => (row < LINEAR_COMPONENTS ? positionGain : orientationGain)))
+
 /** The n-th of a list that has one entry for each configuration, or one for all. */
 const nth = <T>(list: readonly T[], index: number): T => list[list.length === 1 ? 0 : index]!
 
 /** Two twists, the singular values, single numbers and what the diagnosis says of the pose. */
 const NUMBERS_BESIDE_JOINTS = 6 + 6 + 6 + 22
-/** What the diagnosis may say of a joint takes as much as this many numbers. */
-const NUMBERS_A_JOINT_DIAGNOSED = 4
-const RATE_FIELDS = ['rates', 'primaryRates', 'secondaryRates'] as const
+/** How many numbers a joint takes in a field: a name as much as one, what the diagnosis may say of it as much as four. */
+const PER_JOINT = [['rates', 1], ['primaryRates', 1], ['secondaryRates', 1], ['saturated', 1], ['diagnosis', 4]] as const
 
 /** Joint rates that move the tool as asked at each configuration, and what became of the wish. */
 export const answerJointRates: UseCase<'jointRates'> = async (caller, { at, body }) => {
@@ -91,7 +95,7 @@ export const answerJointRates: UseCase<'jointRates'> = async (caller, { at, body
   if (body.references !== undefined) read.matched(references.length, count, '/references')
   read.finish()
   const wanted = includedFields(JOINT_RATES_FIELDS, body.include)
-  const numbersAJoint = RATE_FIELDS.filter((field) => wanted.has(field)).length + (wanted.has('diagnosis') ? NUMBERS_A_JOINT_DIAGNOSED : 0)
+  const numbersAJoint = PER_JOINT.reduce((sum, [field, numbers]) => sum + (wanted.has(field) ? numbers : 0), 0)
   checkAnswerSize(count, NUMBERS_BESIDE_JOINTS + numbersAJoint * kinds.length)
 
   const policy: RatePolicy = {
@@ -109,7 +113,7 @@ export const answerJointRates: UseCase<'jointRates'> = async (caller, { at, body
     const reference = body.references && nth(references, index)
     const outcome = resolveRates(chain, work, twist, policy, {
       ...(previous && { previousRates: nth(previous, index) }),
-      ...(reference && { gain: Math.max(reference.positionGain, reference.orientationGain) }),
+      ...(reference && { gain: largestGain(reference, task) }),
     })
     results.push(
       pick<z.infer<typeof JointRatesResult>>(wanted, {

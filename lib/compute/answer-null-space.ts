@@ -28,8 +28,7 @@ function readBasis(read: SiReader, basis: readonly (readonly number[])[], n: num
 export const answerNullSpace: UseCase<'nullSpace'> = async (caller, { at, body }) => {
   const { chain, work, configurations, tipFromTool, characteristicLength, read, envelope } = await begin(caller, at, body)
   const n = chain.joints.length
-  const { alignTo } = body
-  if (alignTo !== undefined) readBasis(read, alignTo, n)
+  if (body.alignTo !== undefined) readBasis(read, body.alignTo, n)
   read.finish()
   const task = taskOf(body.task)
   const wanted = includedFields(NULL_SPACE_FIELDS, body.include, ['projector'])
@@ -39,14 +38,15 @@ export const answerNullSpace: UseCase<'nullSpace'> = async (caller, { at, body }
   const options = { characteristicLength, tolerance: body.tolerance ?? RANK_TOLERANCE }
   const structural = await finishInSlices(structuralLossInSteps(chain, task, { ...options, ...(tipFromTool && { tipFromTool }) }))
 
-  let before = alignTo
+  // Turning the basis changes nothing else of an answer.
+  let before = withBasis ? body.alignTo : undefined
   const results: z.infer<typeof NullSpaceResult>[] = []
   await inSlices(configurations.length, (index) => {
     forwardKinematics(chain, configurations[index]!, work, tipFromTool)
     const space = nullSpace(chain, work, task, structural, {
       ...options,
       withProjector,
-      withBasis: withBasis || before !== undefined,
+      withBasis,
       ...(before && { alignTo: before }),
     })
     if (before !== undefined) before = space.basis

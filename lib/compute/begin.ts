@@ -90,9 +90,9 @@ const MOST_ANSWER_BYTES = 64 * 1024 * 1024
 const BYTES_A_RESULT = 400
 
 /** Fails with answer-too-large when results of this many numbers would exceed 64 MiB. */
-export function checkAnswerSize(results: number, numbersEach: number): void {
+export function checkAnswerSize(results: number, numbersEach: number, what = 'configurations'): void {
   const bytes = results * (BYTES_A_RESULT + numbersEach * BYTES_A_NUMBER)
   if (bytes <= MOST_ANSWER_BYTES) return
   const most = Math.floor(MOST_ANSWER_BYTES / (BYTES_A_RESULT + numbersEach * BYTES_A_NUMBER))
-  fail('answer-too-large', `The answer was estimated at ${Math.ceil(bytes / 1024 / 1024)} MiB, and 64 MiB is the most. Send at most ${most} configurations at once, or name the fields you need in "include".`)
+  fail('answer-too-large', `The answer was estimated at ${Math.ceil(bytes / 1024 / 1024)} MiB, and 64 MiB is the most. Send at most ${most} ${what} at once, or name the fields you need in "include".`)
 }

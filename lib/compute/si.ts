@@ -58,10 +58,10 @@ export class SiReader {
     this.lengths.push({ pointer, detail })
   }
 
-  /** A list that has one entry for each configuration, or one for all. */
-  matched(count: number, configurations: number, pointer: string): void {
-    if (count !== 1 && count !== configurations) {
-      this.lengths.push({ pointer, detail: `has ${count} entries; send one for each of the ${configurations} configurations, or one for all` })
+  /** A list that has one entry for each configuration (or what else there is a result for), or one for all. */
+  matched(count: number, results: number, pointer: string, what = 'configurations'): void {
+    if (count !== 1 && count !== results) {
+      this.lengths.push({ pointer, detail: `has ${count} entries; send one for each of the ${results} ${what}, or one for all` })
     }
   }
 

@@ -72,6 +72,16 @@ export const NullSpaceQuestion = z.strictObject({
   include: include(NULL_SPACE_FIELDS),
 })
 
+/** Weights further apart than this, as a ratio, leave the lighter joints no digits. */
+const WIDEST_WEIGHTS = 1e12
+
+/** Single weights out of range are told of one by one. */
+function areComparable(weights: readonly number[]): boolean {
+  const least = weights.reduce((a, b) => Math.min(a, b), WIDEST_WEIGHTS)
+  const most = weights.reduce((a, b) => Math.max(a, b), 0)
+  return least < 1 / WIDEST_WEIGHTS || most > WIDEST_WEIGHTS || most <= WIDEST_WEIGHTS * least
+}
+
 export const JointRatesQuestion = z
   .strictObject({
     ...common,
@@ -86,7 +96,8 @@ export const JointRatesQuestion = z
       .meta({ description: 'Closed loop: pose in the base link, feed-forward twist in task.frame.' }),
     inverse: Inverse.optional(),
     jointWeights: z
-      .array(z.number().min(1e-12, 'must be at least 1e-12').max(1e12, 'at most 1e12'))
+      .array(z.number().min(1 / WIDEST_WEIGHTS, 'must be at least 1e-12').max(WIDEST_WEIGHTS, 'at most 1e12'))
+      .refine(areComparable, 'the largest may be 1e12 times the smallest at most')
       .optional()
       .meta({ description: 'What a unit of each rate costs, squared; SI. The projector is then I − J_W⁺J.' }),
     secondary: z.array(Secondary).max(16).optional().meta({ description: 'What spare freedom is spent on; gains add up.' }),
@@ -128,7 +139,8 @@ export const JointRatesQuestion = z
 
 export const MOST_ATTEMPTS = 64
 
-const tolerance = z.number().gt(0, 'must be greater than 0')
+// Far below what binary64 can tell apart at the size of an arm, and still not 0 when divided by a thousand.
+const tolerance = z.number().min(1e-12, 'must be at least 1e-12')
 
 const { configurations: _configurations, ...withoutConfigurations } = common
 

@@ -52,6 +52,7 @@ describe('a problem with more to say', () => {
 
   it('says how much would be accepted when the answer would be too large', async () => {
     expect((await answerTo('answer-too-large', 'nullSpace')).body).toMatchObject({ detail: expect.stringMatching(/at most \d+ configurations at once/) })
+    expect((await answerTo('answer-too-large', 'inverseKinematics')).body).toMatchObject({ detail: expect.stringMatching(/at most \d+ targets at once/) })
   })
 })
 

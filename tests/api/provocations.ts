@@ -25,6 +25,7 @@ const expired = once(() => makeExpiredKey(SCOPES))
 const ended = once(() => endedSession('mira'))
 const aKey = once(async () => (await makeKey(['gateway'])).id)
 const longArm = once(async () => (await importModel('A very long arm', snake(100))).model.slug)
+const longestArm = once(async () => (await importModel('A longer arm still', snake(300, 0.02))).model.slug)
 const cart = once(async () => (await importModel('A cart', floatingCart())).model.slug)
 
 /** The declared example as an administrator, who may do everything, with changes. */
@@ -40,6 +41,8 @@ const withFields = (fields: object, places: Fields = {}): Provoke => async (oper
   asAdministrator(operation, { json: { ...(operation.example as object), ...fields } }, places)
 
 const rows = (count: number, joints: number) => Array.from({ length: count }, () => new Array<number>(joints).fill(0))
+
+const outOfReach = (count: number) => new Array<object>(count).fill({ position: [1e6, 0, 0], quaternion: [0, 0, 0, 1] })
 
 const MEBIBYTE = 1024 * 1024
 
@@ -81,15 +84,24 @@ export const PROVOCATIONS: Partial<Record<ProblemCode, Provoke>> = {
   'if-match-required': (operation) => asAdministrator(operation),
   stale: (operation) => asAdministrator(operation, { headers: { 'if-match': '"of another state"' } }),
   'fingerprint-mismatch': (operation) => asAdministrator(operation, { headers: { 'if-match': `"${'0'.repeat(64)}"` } }),
-  'length-mismatch': withFields({ configurations: [[0, 0, 0, 0, 0, 0]] }),
+  'length-mismatch': (operation, name) =>
+    withFields({ [name === 'inverseKinematics' ? 'seeds' : 'configurations']: [[0, 0, 0, 0, 0, 0]] })(operation, name),
   'chain-not-found': withFields({ chain: { tip: 'never_was' } }),
   'chain-not-computable': async (operation, name) =>
-    withFields({ configurations: [[0]], chain: { base: 'ground', tip: 'arm' } }, { model: await cart() })(operation, name),
-  'answer-too-large': async (operation, name) =>
     withFields(
+      { ...(name === 'inverseKinematics' ? { seeds: [[0]] } : { configurations: [[0]] }), chain: { base: 'ground', tip: 'arm' } },
+      { model: await cart() },
+    )(operation, name),
+  'answer-too-large': async (operation, name) => {
+    if (name === 'inverseKinematics') return withFields({ targets: outOfReach(10_000), seeds: undefined }, { model: await longestArm() })(operation, name)
+    return withFields(
       { configurations: rows(10_000, 100), ...(name === 'jointRates' ? { secondary: [] } : {}), ...(name === 'forwardKinematics' ? { links: new Array(50).fill('l1') } : {}) },
       { model: await longArm() },
-    )(operation, name),
+    )(operation, name)
+  },
+  // More than half a million searches by an arm of a hundred joints: no machine does them in ten seconds.
+  'budget-exceeded': async (operation, name) =>
+    withFields({ targets: outOfReach(10_000), seeds: undefined, attempts: 64, include: ['converged'] }, { model: await longArm() })(operation, name),
   'link-not-determined': withFields({ chain: { tip: 'link_3' }, configurations: [[0, 0, 0]], links: ['link_1', 'tool_flange'] }),
   'import-refused': (operation) => asAdministrator(operation),
   'slug-taken': (operation) =>

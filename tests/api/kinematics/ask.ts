@@ -1,6 +1,6 @@
 import type { Response } from 'supertest'
 import type { z } from 'zod'
-import type { ForwardKinematicsAnswer, JacobianAnswer, JointRatesAnswer, NullSpaceAnswer } from '@/lib/contract/kinematic-answers'
+import type { ForwardKinematicsAnswer, InverseKinematicsAnswer, JacobianAnswer, JointRatesAnswer, NullSpaceAnswer } from '@/lib/contract/kinematic-answers'
 import { type Headers, send } from '../send'
 import { asKey } from '../support/callers'
 
@@ -9,9 +9,12 @@ interface Answers {
   jacobian: z.infer<typeof JacobianAnswer>
   'null-space': z.infer<typeof NullSpaceAnswer>
   'joint-rates': z.infer<typeof JointRatesAnswer>
+  'inverse-kinematics': z.infer<typeof InverseKinematicsAnswer>
 }
 export type Question = keyof Answers
-export const QUESTIONS: readonly Question[] = ['forward-kinematics', 'jacobian', 'null-space', 'joint-rates']
+/** The questions about configurations. */
+export const ABOUT_CONFIGURATIONS = ['forward-kinematics', 'jacobian', 'null-space', 'joint-rates'] as const satisfies readonly Question[]
+export const QUESTIONS: readonly Question[] = [...ABOUT_CONFIGURATIONS, 'inverse-kinematics']
 
 const pathOf = (model: string, question: string) => `/teams/tarnholm/models/${model.includes('/') ? model.replace('/', '/revisions/') : `${model}/revisions/1`}/${question}`
 

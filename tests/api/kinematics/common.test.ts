@@ -1,22 +1,29 @@
 import { describe, expect, inject, it } from 'vitest'
 import type { ModelReference } from '@/lib/contract/kinematic-answers'
-import { FORWARD_KINEMATICS_FIELDS, JACOBIAN_FIELDS, JOINT_RATES_FIELDS, NULL_SPACE_FIELDS } from '@/lib/contract/kinematic-questions'
+import { FORWARD_KINEMATICS_FIELDS, INVERSE_KINEMATICS_FIELDS, JACOBIAN_FIELDS, JOINT_RATES_FIELDS, NULL_SPACE_FIELDS } from '@/lib/contract/kinematic-questions'
 import { expectProblem, pointersOf } from '../expect-problem'
 import { importModel } from '../import-model'
 import { get } from '../send'
 import { asPerson } from '../support/callers'
 import { floatingCart } from '../urdf'
-import { ask, answerTo, QUESTIONS, resultOf, resultsOf, type Question } from './ask'
+import { ABOUT_CONFIGURATIONS, ask, answerTo, QUESTIONS, resultOf, resultsOf, type Question } from './ask'
 import { expectClose } from './close'
 
 const TWIST = { twists: [[0.1, 0, 0, 0, 0, 0]] }
-const asked = (question: Question, more: object = {}) => ({ configurations: [[0.3, 0.4, 0.5]], ...(question === 'joint-rates' ? TWIST : {}), ...more })
+const FAR = { position: [9, 0, 0], quaternion: [0, 0, 0, 1] }
+
+/** The least that can be asked, of an arm at `configuration` or from there. */
+function asked(question: Question, more: object = {}, configuration: readonly number[] = [0.3, 0.4, 0.5]): object {
+  if (question === 'inverse-kinematics') return { targets: [FAR], seeds: [configuration], attempts: 1, ...more }
+  return { configurations: [configuration], ...(question === 'joint-rates' ? TWIST : {}), ...more }
+}
 
 const FIELDS: Readonly<Record<Question, readonly string[]>> = {
   'forward-kinematics': FORWARD_KINEMATICS_FIELDS,
   jacobian: JACOBIAN_FIELDS,
   'null-space': NULL_SPACE_FIELDS,
   'joint-rates': JOINT_RATES_FIELDS,
+  'inverse-kinematics': INVERSE_KINEMATICS_FIELDS,
 }
 
 describe.each(QUESTIONS)('%s', (question) => {
@@ -26,8 +33,7 @@ describe.each(QUESTIONS)('%s', (question) => {
       const [model, revision] = place.split('/') as [string, string]
       const { body } = await get(`/teams/tarnholm/models/${model}/revisions/${revision}`, await asPerson('kofi'))
       const { fingerprint, counts } = body as { fingerprint: string; counts: { independent: number } }
-      const configurations = [new Array<number>(counts.independent).fill(0.1)]
-      const response = await ask(question, place, { configurations, ...(question === 'joint-rates' ? TWIST : {}) })
+      const response = await ask(question, place, asked(question, {}, new Array<number>(counts.independent).fill(0.1)))
       expect(response.body).toMatchObject({ model: { team: 'tarnholm', model, revision: Number(revision), status, fingerprint }, characteristicLength: 1 })
       expect(response.headers).toMatchObject({ 'model-fingerprint': fingerprint, link: '</docs/cautions>; rel="help"', 'cache-control': 'no-store' })
     }
@@ -56,6 +62,33 @@ describe.each(QUESTIONS)('%s', (question) => {
     for (const include of [[], ['speed'], 'pose']) expectProblem(await ask(question, 'trainer-3r', asked(question, { include })), 'invalid-request')
   })
 
+  it('warns of the findings that touch the chain, and of no others', async () => {
+    expect((await answerTo(question, 'dunlin-2', asked(question, {}, [0.1, 0.2]))).warnings).toMatchObject([{ rule: 'axis-normalised', element: "joint 'tilt'" }])
+    expect(await answerTo(question, 'dunlin-2', asked(question, { chain: { tip: 'cradle' } }, [0.1]))).not.toHaveProperty('warnings')
+    expect(await answerTo(question, 'trainer-3r', asked(question))).not.toHaveProperty('warnings')
+  })
+
+  it('does not compute across a floating joint, and does beside it', async () => {
+    const { model } = await importModel(`Cart for ${question}`, floatingCart())
+    expectProblem(await ask(question, model.slug, asked(question, { chain: { base: 'ground', tip: 'arm' } }, [0.1])), 'chain-not-computable')
+    expect((await answerTo(question, model.slug, asked(question, { chain: { base: 'platform', tip: 'arm' } }, [0.1]))).chain.joints).toEqual(['lift'])
+  })
+
+  it('refuses a characteristic length that would leave nothing finite', async () => {
+    for (const characteristicLength of [0, -1, 5e-324, 1e-10, 1.1e9]) {
+      expect(pointersOf(await ask(question, 'trainer-3r', asked(question, { characteristicLength })))).toEqual(['/characteristicLength'])
+    }
+    for (const characteristicLength of [1e-9, 1e9]) expect((await answerTo(question, 'trainer-3r', asked(question, { characteristicLength }))).characteristicLength).toBe(characteristicLength)
+  })
+
+  it('takes the units one by one and no others', async () => {
+    expect((await answerTo(question, 'trainer-3r', asked(question, { units: {} }))).units).toEqual({ length: 'm', angle: 'rad' })
+    expect((await answerTo(question, 'trainer-3r', asked(question, { units: { length: 'mm' } }))).units).toEqual({ length: 'mm', angle: 'rad' })
+    expect(pointersOf(await ask(question, 'trainer-3r', asked(question, { units: { length: 'in', angle: 'gon' } })))).toEqual(['/units/length', '/units/angle'])
+  })
+})
+
+describe.each(ABOUT_CONFIGURATIONS)('%s', (question) => {
   it('answers ten thousand configurations in their order, and not one more', async () => {
     const configurations = Array.from({ length: 10_000 }, (_, i) => [i / 10_000, 0.4, 0.5])
     const include = [FIELDS[question][0]]
@@ -75,68 +108,66 @@ describe.each(QUESTIONS)('%s', (question) => {
 
   it('wants at least one configuration', async () => {
     expect(pointersOf(await ask(question, 'trainer-3r', asked(question, { configurations: [] })))).toEqual(['/configurations'])
-    const { configurations: _none, ...without } = asked(question)
-    expect(pointersOf(await ask(question, 'trainer-3r', without))).toEqual(['/configurations'])
-  })
-
-  it('warns of the findings that touch the chain, and of no others', async () => {
-    const two = { configurations: [[0.1, 0.2]], ...(question === 'joint-rates' ? TWIST : {}) }
-    expect((await answerTo(question, 'dunlin-2', two)).warnings).toMatchObject([{ rule: 'axis-normalised', element: "joint 'tilt'" }])
-    expect(await answerTo(question, 'dunlin-2', { ...two, chain: { tip: 'cradle' }, configurations: [[0.1]] })).not.toHaveProperty('warnings')
-    expect(await answerTo(question, 'trainer-3r', asked(question))).not.toHaveProperty('warnings')
-  })
-
-  it('does not compute across a floating joint, and does beside it', async () => {
-    const { model } = await importModel(`Cart for ${question}`, floatingCart())
-    const one = { configurations: [[0.1]], ...(question === 'joint-rates' ? TWIST : {}) }
-    expectProblem(await ask(question, model.slug, { ...one, chain: { base: 'ground', tip: 'arm' } }), 'chain-not-computable')
-    expect((await answerTo(question, model.slug, { ...one, chain: { base: 'platform', tip: 'arm' } })).chain.joints).toEqual(['lift'])
-  })
-
-  it('refuses a characteristic length that would leave nothing finite', async () => {
-    for (const characteristicLength of [0, -1, 5e-324, 1e-10, 1.1e9]) {
-      expect(pointersOf(await ask(question, 'trainer-3r', asked(question, { characteristicLength })))).toEqual(['/characteristicLength'])
-    }
-    for (const characteristicLength of [1e-9, 1e9]) expect((await answerTo(question, 'trainer-3r', asked(question, { characteristicLength }))).characteristicLength).toBe(characteristicLength)
-  })
-
-  it('takes the units one by one and no others', async () => {
-    expect((await answerTo(question, 'trainer-3r', asked(question, { units: {} }))).units).toEqual({ length: 'm', angle: 'rad' })
-    expect((await answerTo(question, 'trainer-3r', asked(question, { units: { length: 'mm' } }))).units).toEqual({ length: 'mm', angle: 'rad' })
-    expect(pointersOf(await ask(question, 'trainer-3r', asked(question, { units: { length: 'in', angle: 'gon' } })))).toEqual(['/units/length', '/units/angle'])
+    expect(pointersOf(await ask(question, 'trainer-3r', asked(question, { configurations: undefined })))).toEqual(['/configurations'])
   })
 })
 
 /** What other parts of the contract bring later: unknown until then, and never half done. */
-const LATER: readonly (readonly [Question | 'inverse-kinematics', object, string])[] = [
-  ['joint-rates', { inverse: { method: 'filtered', threshold: 0.02, damping: 0.05 } }, '/inverse/method'],
-  ['joint-rates', { jointWeights: [1, 1, 1] }, '/jointWeights'],
-  ['joint-rates', { limits: { rates: 'saturate' } }, '/limits/rates'],
-  ['joint-rates', { limits: { accelerations: [1, 1, 1] } }, '/limits/accelerations'],
-  ['joint-rates', { limits: { previousRates: [[0, 0, 0]] } }, '/limits/previousRates'],
-  ['joint-rates', { limits: { dt: 0.01 } }, '/limits/dt'],
-  ['joint-rates', { secondary: [{ objective: 'manipulability', gain: 1 }] }, '/secondary/0/objective'],
-  ['joint-rates', { secondary: [{ objective: 'clearance', gain: 1 }] }, '/secondary/0/objective'],
-  ['joint-rates', { secondary: [{ objective: 'expression', expression: 'q1', sense: 'minimise' }] }, '/secondary/0/objective'],
-  ['joint-rates', { secondary: [{ objective: 'task', link: 'fore_link' }] }, '/secondary/0/objective'],
-  ['null-space', { alignTo: [[1], [0], [0]] }, '/alignTo'],
-  ['null-space', { jointWeights: [1, 1, 1] }, '/jointWeights'],
-  ['jacobian', { seeds: [[0, 0, 0]] }, '/seeds'],
-]
+const LATER = [
+  ['clearance', { obstacles: [{ shape: 'sphere', centre: [1, 0, 0], radius: 0.2 }], linkRadius: 0.05, influence: 0.3, gain: 1 }],
+  ['expression', { expression: 'q1', sense: 'minimise', gain: 1 }],
+  ['task', { link: 'fore_link', task: { components: ['vx'] }, twist: [0, 0, 0, 0, 0, 0] }],
+] as const
 
 describe('what is not there yet', () => {
-  it.each(LATER)('%s refuses %j at its place', async (question, more, pointer) => {
-    const response = await ask(question, 'trainer-3r', asked(question as Question, more))
-    expectProblem(response, 'invalid-request')
-    expect(pointersOf(response)).toEqual([pointer])
+  it.each(LATER)('is the objective %s: unknown at its place', async (objective, more) => {
+    for (const question of ['joint-rates', 'inverse-kinematics'] as const) {
+      const response = await ask(question, 'trainer-3r', asked(question, { secondary: [{ objective: 'mid-range', gain: 1 }, { objective, ...more }] }))
+      expectProblem(response, 'invalid-request')
+      expect(pointersOf(response)).toEqual(['/secondary/1/objective'])
+    }
   })
 
-  it('is an unknown path or format', async () => {
-    expectProblem(await ask('inverse-kinematics', 'trainer-3r', {}), 'not-found')
-    for (const question of QUESTIONS) {
-      expectProblem(await ask(question, 'trainer-3r', asked(question), { accept: 'text/csv' }), 'not-acceptable')
-      expectProblem(await ask(question, 'trainer-3r', asked(question), { accept: 'application/octet-stream' }), 'not-acceptable')
-    }
+  it.each(QUESTIONS)('is any format of %s but JSON', async (question) => {
+    for (const accept of ['text/csv', 'application/octet-stream']) expectProblem(await ask(question, 'trainer-3r', asked(question), { accept }), 'not-acceptable')
+  })
+})
+
+/** Fields that are right by themselves, or nearly, and wrong where they stand. */
+const MISFITS: readonly (readonly [Question, object, 'invalid-request' | 'length-mismatch', readonly string[]])[] = [
+  ['forward-kinematics', { task: { components: ['vx'] } }, 'invalid-request', ['/task']],
+  ['jacobian', { alignTo: [[1], [0], [0]] }, 'invalid-request', ['/alignTo']],
+  ['null-space', { jointWeights: [1, 1, 1] }, 'invalid-request', ['/jointWeights']],
+  ['joint-rates', { seeds: [[0, 0, 0]] }, 'invalid-request', ['/seeds']],
+  ['inverse-kinematics', { configurations: [[0, 0, 0]] }, 'invalid-request', ['/configurations']],
+  ['inverse-kinematics', { limits: { rates: 'scale' } }, 'invalid-request', ['/limits']],
+  ['joint-rates', { inverse: { method: 'filtered' } }, 'invalid-request', ['/inverse/threshold', '/inverse/damping']],
+  ['joint-rates', { inverse: { method: 'filtered', threshold: 0, damping: -1 } }, 'invalid-request', ['/inverse/threshold', '/inverse/damping']],
+  ['joint-rates', { inverse: { method: 'filtered', threshold: 1e10, damping: 2e9 } }, 'invalid-request', ['/inverse/threshold', '/inverse/damping']],
+  ['joint-rates', { jointWeights: [0, 1, -1] }, 'invalid-request', ['/jointWeights/0', '/jointWeights/2']],
+  ['joint-rates', { jointWeights: [1e13, 1, 9e-13] }, 'invalid-request', ['/jointWeights/0', '/jointWeights/2']],
+  ['joint-rates', { jointWeights: [1e-7, 1, 1e6] }, 'invalid-request', ['/jointWeights']],
+  ['joint-rates', { jointWeights: [1, 1] }, 'length-mismatch', ['/jointWeights']],
+  ['joint-rates', { secondary: [{ objective: 'manipulability' }] }, 'invalid-request', ['/secondary/0/gain']],
+  ['joint-rates', { secondary: [{ objective: 'manipulability', gain: 1, posture: [0, 0, 0] }] }, 'invalid-request', ['/secondary/0/posture']],
+  ['joint-rates', { limits: { rates: 'clip' } }, 'invalid-request', ['/limits/rates']],
+  ['joint-rates', { limits: { accelerations: [1, 1, 1] } }, 'invalid-request', ['/limits/dt']],
+  ['joint-rates', { limits: { previousRates: [[0, 0, 0]], dt: 0.01 } }, 'invalid-request', ['/limits/accelerations']],
+  ['joint-rates', { limits: { previousRates: [[0, 0, 0]] } }, 'invalid-request', ['/limits/accelerations']],
+  ['joint-rates', { limits: { dt: 0 } }, 'invalid-request', ['/limits/dt']],
+  ['joint-rates', { limits: { dt: 0.01, accelerations: [1, 0, -1] } }, 'invalid-request', ['/limits/accelerations/1', '/limits/accelerations/2']],
+  ['joint-rates', { limits: { dt: 0.01, accelerations: [1, null, 2e9] } }, 'invalid-request', ['/limits/accelerations/2']],
+  ['joint-rates', { limits: { dt: 0.01, accelerations: [1, null] } }, 'length-mismatch', ['/limits/accelerations']],
+  ['joint-rates', { limits: { dt: 0.01, accelerations: [1, 1, 1], previousRates: [[0, 0, 0], [0, 0, 0]] } }, 'length-mismatch', ['/limits/previousRates']],
+  ['joint-rates', { limits: { dt: 0.01, accelerations: [1, 1, 1], previousRates: [[0, 0]] } }, 'length-mismatch', ['/limits/previousRates/0']],
+  ['joint-rates', { limits: { dt: 0.01, accelerations: [1, 1, 1], previousRates: [] } }, 'invalid-request', ['/limits/previousRates']],
+]
+
+describe('what does not fit', () => {
+  it.each(MISFITS)('%s refuses %j (%s)', async (question, more, code, pointers) => {
+    const response = await ask(question, 'trainer-3r', asked(question, more))
+    expectProblem(response, code)
+    expect(pointersOf(response)).toEqual(pointers)
   })
 })
 
