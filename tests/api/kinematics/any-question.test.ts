@@ -26,24 +26,62 @@ const inverse = fc.oneof(
   fc.record({ method: fc.constant('truncated'), tolerance: positive }),
   fc.record({ method: fc.constant('damped'), damping: fc.oneof(fc.constant(0), positive) }),
   fc.record({ method: fc.constant('adaptive-damped'), threshold: positive, maxDamping: positive }),
+  fc.record({ method: fc.constant('filtered'), threshold: positive, damping: fc.oneof(fc.constant(0), positive) }),
 )
 const optional = { requiredKeys: ['configurations'] as never[] }
+
+const secondary = (joints: number) =>
+  fc.array(
+    fc.oneof(
+      fc.record({ objective: fc.constantFrom('mid-range', 'manipulability'), gain }),
+      fc.record({ objective: fc.constant('posture'), posture: list(joints), gain }),
+    ),
+    { maxLength: 2 },
+  )
+
+/** As light and as heavy as weights may be, and as far apart. */
+const jointWeights = (joints: number) =>
+  fc.oneof(
+    fc.array(fc.constantFrom(1e-12, 1e-6, 1), { minLength: joints, maxLength: joints }),
+    fc.array(fc.constantFrom(1, 3, 1e6, 1e12), { minLength: joints, maxLength: joints }),
+  )
+
+const limits = (joints: number) => {
+  const rates = { rates: fc.constantFrom('scale', 'saturate', 'report'), derating: positive }
+  const dt = fc.constantFrom(1e-6, 0.01, 1, 1000)
+  const accelerations = fc.array(fc.oneof(fc.constant(null), fc.constant(1e9), positive), { minLength: joints, maxLength: joints })
+  return fc.oneof(
+    fc.record(rates, { requiredKeys: [] }),
+    fc.record({ ...rates, dt, accelerations, previousRates: fc.array(list(joints), { minLength: 1, maxLength: 1 }) }, { requiredKeys: ['dt', 'accelerations'] }),
+    fc.record({ ...rates, dt }),
+  )
+}
 
 const QUESTION: Readonly<Record<Question, (joints: number) => fc.Arbitrary<object>>> = {
   'forward-kinematics': (joints) => fc.record({ ...common(joints), matrices: fc.boolean() }, optional),
   jacobian: (joints) => fc.record({ ...common(joints), task, frame: fc.constantFrom('base', 'tip') }, optional),
-  'null-space': (joints) => fc.record({ ...common(joints), task, tolerance: positive }, optional),
+  'null-space': (joints) => {
+    const alignTo = fc.integer({ min: 0, max: joints + 1 }).chain((width) => fc.array(list(width), { minLength: joints, maxLength: joints }))
+    return fc.record({ ...common(joints), task, tolerance: positive, alignTo }, optional)
+  },
   'joint-rates': (joints) => {
-    const secondary = fc.array(
-      fc.oneof(fc.record({ objective: fc.constant('mid-range'), gain }), fc.record({ objective: fc.constant('posture'), posture: list(joints), gain })),
-      { maxLength: 2 },
-    )
-    const limits = fc.record({ rates: fc.constantFrom('scale', 'report'), derating: positive })
     const wish = fc.oneof(
       fc.record({ twists: fc.array(list(6), { minLength: 1, maxLength: 1 }) }),
       fc.record({ references: fc.array(fc.record({ pose, twist: list(6), gains: fc.record({ position: gain, orientation: gain }) }), { minLength: 1, maxLength: 1 }) }),
     )
-    return fc.tuple(fc.record({ ...common(joints), task, inverse, secondary, limits }, optional), wish).map(([question, more]) => ({ ...question, ...more }))
+    const rest = { task, inverse, jointWeights: jointWeights(joints), secondary: secondary(joints), limits: limits(joints) }
+    return fc.tuple(fc.record({ ...common(joints), ...rest }, optional), wish).map(([question, more]) => ({ ...question, ...more }))
+  },
+  'inverse-kinematics': (joints) => {
+    const { configurations: _none, ...rest } = common(joints)
+    const tolerance = fc.constantFrom(1e-12, 1e-6, 1, 1e6)
+    return fc.record(
+      {
+        ...rest, task, positionTolerance: tolerance, orientationTolerance: tolerance, secondary: secondary(joints),
+        targets: fc.array(pose, { minLength: 1, maxLength: 2 }), seeds: fc.array(list(joints), { minLength: 1, maxLength: 1 }), attempts: fc.integer({ min: 1, max: 2 }),
+      },
+      { requiredKeys: ['targets', 'attempts'] },
+    )
   },
 }
 
