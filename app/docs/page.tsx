@@ -57,7 +57,7 @@ export default async function StartPage() {
       </p>
       <CodeBlock title="Request with a pinned fingerprint" code={call(`\n  -H 'If-Match: "<fingerprint, 64 digits>"' \\`)} />
 
-      <h2>4. The four questions</h2>
+      <h2>4. The questions</h2>
       <FactTable
         caption="Kinematics operations"
         heads={['Ends in', 'Answers']}
