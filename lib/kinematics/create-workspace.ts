@@ -25,6 +25,8 @@ export interface Workspace {
   readonly baseFromMotions: Float64Array
   readonly baseFromTip: Float64Array
   readonly tipFromTool: Float64Array
+  /** Whether tipFromTool is anything but the identity. */
+  hasTool: boolean
   /** Equal to baseFromTip where no tool was given. */
   readonly baseFromTool: Float64Array
   /** 6 x n, at the tool point, base axes. */
@@ -88,6 +90,7 @@ export function createWorkspace(chain: Chain): Workspace {
     baseFromMotions: new Float64Array(TRANSFORM_SIZE * chain.motions.length),
     baseFromTip: identityTransform(),
     tipFromTool: identityTransform(),
+    hasTool: false,
     baseFromTool: identityTransform(),
     jacobian: new Float64Array(TWIST_SIZE * n),
     tipJacobian: new Float64Array(TWIST_SIZE * n),
