@@ -1,5 +1,6 @@
 import { identityTransform, TRANSFORM_SIZE } from '@/lib/math/rigid-transform'
 import { createSingularValues, type SingularValues } from '@/lib/math/singular-values'
+import { createSixFactors, type SixFactors } from '@/lib/math/six'
 import { createTriangleRoom, type TriangleRoom } from '@/lib/math/triangle-values'
 import type { Chain } from './chain'
 import { prepareChain, type PreparedChain } from './prepared-chain'
@@ -24,6 +25,8 @@ export interface Workspace {
   readonly baseFromMotions: Float64Array
   readonly baseFromTip: Float64Array
   readonly tipFromTool: Float64Array
+  /** Whether tipFromTool is anything but the identity. */
+  hasTool: boolean
   /** Equal to baseFromTip where no tool was given. */
   readonly baseFromTool: Float64Array
   /** 6 x n, at the tool point, base axes. */
@@ -55,6 +58,7 @@ export interface Workspace {
   readonly square: Float64Array
   readonly coordinates: Float64Array
   readonly triangle: TriangleRoom
+  readonly six: SixFactors
   /** How the task Jacobian was solved (see solvePrimary). */
   readonly solved: Solved
   readonly bounds: RateBounds
@@ -86,6 +90,7 @@ export function createWorkspace(chain: Chain): Workspace {
     baseFromMotions: new Float64Array(TRANSFORM_SIZE * chain.motions.length),
     baseFromTip: identityTransform(),
     tipFromTool: identityTransform(),
+    hasTool: false,
     baseFromTool: identityTransform(),
     jacobian: new Float64Array(TWIST_SIZE * n),
     tipJacobian: new Float64Array(TWIST_SIZE * n),
@@ -108,6 +113,7 @@ export function createWorkspace(chain: Chain): Workspace {
     coordinates: new Float64Array(TWIST_SIZE),
     solved: { rows: NO_ROWS, rank: 0, damping: 0, easy: false, wished: 0 },
     triangle: createTriangleRoom(TWIST_SIZE),
+    six: createSixFactors(),
     bounds: createRateBounds(n),
     scaling: { scale: 1, secondaryScale: 1 },
     saturation: null,

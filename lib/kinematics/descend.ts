@@ -19,7 +19,7 @@ const WORTHWHILE = 1e-4
 const PATIENCE = 6
 
 /** How a descent ended. */
-export type Ending = 'converged' | 'stationary' | 'at-limits' | 'out-of-steps'
+type Ending = 'converged' | 'stationary' | 'at-limits' | 'out-of-steps'
 
 /** A place reached by a descent. */
 export interface Place {

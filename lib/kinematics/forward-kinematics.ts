@@ -10,14 +10,13 @@ import type { Workspace } from './create-workspace'
 export function forwardKinematics(chain: Chain, q: ArrayLike<number>, work: Workspace, tipFromTool?: ArrayLike<number>): void {
   if (work.chain !== chain) throw new RangeError('this workspace was made for another chain')
   if (q.length !== chain.joints.length) throw new RangeError(`${chain.joints.length} joint values are needed, ${q.length} were given`)
-  const { baseFromFirst, lastFromTip, steps, rotary, offset, quarters, turning } = work.prepared
+  const { baseFromFirst, lastFromTip, steps, rotary, quarters, turning } = work.prepared
   const { angles, slides, turns, baseFromMotions } = work
   const count = rotary.length
   const kept = work.q
   for (let i = 0; i < kept.length; i++) kept[i] = q[i]!
-  if (turning) for (let i = 0; i < count; i++) angles[i] = kept[i]! + offset[i]!
-  else fillMoved(work, count)
-  sinesAndCosines(angles, quarters, count, turns)
+  if (!turning) fillMoved(work, count)
+  sinesAndCosines(turning ? kept : angles, quarters, count, turns)
   placeFrames(baseFromFirst, steps, turns, slides, count, baseFromMotions)
   if (count === 0) copyTransform(baseFromFirst, work.baseFromTip)
   else multiplyTransforms(baseFromMotions, TRANSFORM_SIZE * (count - 1), lastFromTip, 0, work.baseFromTip, 0)
@@ -36,12 +35,15 @@ function fillMoved({ prepared, q, angles, slides }: Workspace, count: number): v
 
 const NO_TOOL = identityTransform()
 
-function placeTool({ baseFromTip, tipFromTool, baseFromTool }: Workspace, given: ArrayLike<number> | undefined): void {
+function placeTool(work: Workspace, given: ArrayLike<number> | undefined): void {
+  const { baseFromTip, tipFromTool, baseFromTool } = work
   if (given === undefined) {
-    copyTransform(NO_TOOL, tipFromTool)
+    if (work.hasTool) copyTransform(NO_TOOL, tipFromTool)
+    work.hasTool = false
     copyTransform(baseFromTip, baseFromTool)
     return
   }
+  work.hasTool = true
   for (let i = 0; i < TRANSFORM_SIZE; i++) tipFromTool[i] = given[i]!
   multiplyTransforms(baseFromTip, 0, tipFromTool, 0, baseFromTool, 0)
 }

@@ -28,7 +28,7 @@ export interface PreparedChain {
   readonly rate: Float64Array
   /** Whether there is one motion for each coordinate, in order, with multiplier 1: then no column of a Jacobian is a sum. */
   readonly plain: boolean
-  /** Plain, and each motion a turn. */
+  /** Plain, and each motion a turn by its coordinate and whole quarters: then the configuration is what they turn by. */
   readonly turning: boolean
 }
 
@@ -73,7 +73,7 @@ export function prepareChain(chain: Chain): PreparedChain {
     rest,
     rate: Float64Array.from(chain.joints, ({ rate }) => (rate !== null && rate > 0 ? rate : Number.POSITIVE_INFINITY)),
     plain,
-    turning: plain && motions.every(({ rotary }) => rotary),
+    turning: plain && motions.every(({ rotary, offset }, i) => rotary && offset === 0 && rest[i] === 0),
   }
 }
 

@@ -16,11 +16,15 @@ export interface RateScaling {
 /** Of all (scale, secondaryScale) in [0, 1]² that keep scale·primary + secondaryScale·secondary within the bounds, the largest scale,
  *  then the largest secondaryScale. The secondary motion may help: where it opposes the primary at the joint that binds, keeping it
  *  keeps the tool faster. False, and both 0, where no pair keeps them: bounds that exclude standing still may be out of reach.
- *  A linear programme in two variables: the unit square is cut by each bound in turn. */
+ *  A linear programme in two variables: the unit square is cut by each bound in turn, unless the edge of full scale already meets them. */
 export function scaleToBounds(bounds: RateBounds, primary: Float64Array, secondary: Float64Array, out: RateScaling): boolean {
   out.scale = 1
   out.secondaryScale = 1
   if (keeps(bounds, primary, secondary, 1, 1)) return true
+  if (keepsAtFullScale(bounds, primary, secondary, out)) {
+    takeOffRounding(bounds, primary, secondary, out)
+    return true
+  }
   const { lower, upper } = bounds
   for (let k = 0; k < UNIT_SQUARE.length; k++) bounds.corners[k] = UNIT_SQUARE[k]!
   let corners = UNIT_SQUARE.length / 2
@@ -33,6 +37,26 @@ export function scaleToBounds(bounds: RateBounds, primary: Float64Array, seconda
   out.secondaryScale = corners === 0 ? 0 : largestSecondary(bounds, primary, secondary, out.scale)
   takeOffRounding(bounds, primary, secondary, out)
   return corners > 0
+}
+
+/** Whether the bounds can be kept at scale 1: then fills the largest secondaryScale that does. */
+function keepsAtFullScale({ lower, upper }: RateBounds, primary: Float64Array, secondary: Float64Array, out: RateScaling): boolean {
+  let least = 0
+  let most = 1
+  for (let i = 0; i < upper.length; i++) {
+    const p = primary[i]!, s = secondary[i]!
+    const above = upper[i]! - p, below = lower[i]! - p
+    // A part that is lost in the rounding of the rest decides nothing.
+    if (Math.abs(s) <= ROUNDING * (Math.abs(p) + Math.min(upper[i]!, Number.MAX_VALUE))) {
+      if (!(above >= 0 && below <= 0)) return false
+      continue
+    }
+    most = Math.min(most, (s > 0 ? above : below) / s)
+    least = Math.max(least, (s > 0 ? below : above) / s)
+  }
+  if (!(most >= least)) return false
+  out.secondaryScale = most
+  return true
 }
 
 const UNIT_SQUARE = Float64Array.of(0, 0, 1, 0, 1, 1, 0, 1)

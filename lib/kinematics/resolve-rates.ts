@@ -7,13 +7,15 @@ import type { Workspace } from './create-workspace'
 import { diagnose } from './diagnose'
 import type { Diagnosis } from './diagnosis'
 import { prepareWeights } from './joint-weights'
+import { jacobian } from './jacobian'
 import { limitRates } from './limit-rates'
 import { fillWish, needSingularValues } from './objectives'
 import type { Instant, RatePolicy } from './rate-policy'
 import { createRateRecord, type RateRecord } from './rate-record'
-import { projectSecondary, solveDampedOnly, solvePrimary } from './solve-rates'
+import { projectSecondary, solvePrimary } from './solve-rates'
+import { solveSixOnly } from './solve-six'
 import { LINEAR_COMPONENTS, TWIST_SIZE } from './task'
-import { fillTaskJacobian } from './task-jacobian'
+import { copyTaskRows } from './task-jacobian'
 
 /** Joint rates and what became of the twist that was asked for. SI; twists at the tool point in the task's frame. */
 export interface RateOutcome {
@@ -87,25 +89,23 @@ export function resolveRatesInto(
   const { task, inverse, jointWeights, secondary } = policy
   const n = chain.joints.length
   const m = task.rows.length
-  const whole = fillTaskJacobian(chain, work, task)
+  const whole = jacobian(chain, work, task.frame)
   for (let k = 0; k < m; k++) work.asked[k] = twist[task.rows[k]!]!
   const weighted = jointWeights !== undefined
   if (weighted) prepareWeights(work, jointWeights)
 
   const { solved } = work
-  const only = detail === 'rates' && !weighted && secondary.length === 0 && policy.limits.rates !== 'saturate'
-  if (!(only && solveDampedOnly(work, m, inverse, solved))) solvePrimary(work, m, inverse, weighted, needSingularValues(secondary), solved)
+  const only = detail === 'rates' && m === TWIST_SIZE && !weighted && policy.limits.rates !== 'saturate'
+  if (!(only && solveSixOnly(work, whole, task, inverse, secondary, solved))) {
+    copyTaskRows(work, whole, task)
+    solvePrimary(work, m, inverse, weighted, needSingularValues(secondary), solved)
+    fillWish(work, task, solved.rank, secondary, work.secondary)
+    projectSecondary(work, solved, weighted)
+  }
   record.easy = solved.easy
   record.rank = solved.rank
   record.damping = solved.damping
   if (detail === 'all') fillSingularValues(work, m, record)
-  if (secondary.length > 0) {
-    fillWish(work, task, solved.rank, secondary, work.secondary)
-    projectSecondary(work, solved, weighted)
-  } else {
-    for (let j = 0; j < n; j++) work.secondary[j] = 0
-    solved.wished = 0
-  }
   // Adding 0 turns −0 into 0, which is the same number and looks less odd on the wire.
   for (let j = 0; j < n; j++) {
     record.primaryRates[j] = work.primary[j]! + 0

@@ -1,4 +1,3 @@
-import { dampedSix } from '@/lib/math/damped-six'
 import { dot } from '@/lib/math/dot'
 import { factorRows, leastSingularValue, solveLower, triangleNorm } from '@/lib/math/lower-orthogonal'
 import { norm } from '@/lib/math/norm'
@@ -7,7 +6,6 @@ import type { Workspace } from './create-workspace'
 import { fillGains, rankTolerance, undampedFrom, type Inverse } from './inverse'
 import { dampedWeighted, factorWeighted, leastWeighted, projectWeighted } from './joint-weights'
 import { rankOf } from './measures'
-import { TWIST_SIZE } from './task'
 
 /** How the task Jacobian of a pose was solved. */
 export interface Solved {
@@ -58,17 +56,6 @@ export function solvePrimary(work: Workspace, m: number, inverse: Inverse, weigh
   }
 }
 
-/** work.primary for a damped inverse and a task of six components, where nothing else is asked: no rank, no null space, no singular values.
- *  False, and nothing filled, for anything else or where the damping is too small for it. */
-export function solveDampedOnly(work: Workspace, m: number, inverse: Inverse, solved: Solved): boolean {
-  if (m !== TWIST_SIZE || inverse.method !== 'damped' || inverse.damping === 0) return false
-  if (!dampedSix(work.taskJacobian, work.q.length, inverse.damping, work.asked, work.primary)) return false
-  solved.easy = false
-  solved.rank = 0
-  solved.damping = inverse.damping
-  return true
-}
-
 /** Below this the squares that the easy way forms underflow. */
 const SMALLEST = 1e-100
 
@@ -104,12 +91,17 @@ export function projectSecondary(work: Workspace, solved: Solved, weighted: bool
   const { rows, rank } = solved
   solved.wished = norm(secondary)
   if (solved.wished === 0) return
-  const rounding = PROJECTION_ROUNDING * solved.wished
   for (let pass = solved.easy && !weighted ? 1 : 0; pass < 2; pass++) {
     if (weighted) projectWeighted(work, rank, secondary)
     else takeOut(rows, rank, secondary)
   }
-  for (let j = 0; j < secondary.length; j++) if (Math.abs(secondary[j]!) <= rounding) secondary[j] = 0
+  zeroRounding(secondary, solved.wished)
+}
+
+/** Sets to 0 what is rounding beside the size of what was projected. */
+export function zeroRounding(projected: Float64Array, size: number): void {
+  const rounding = PROJECTION_ROUNDING * size
+  for (let j = 0; j < projected.length; j++) if (Math.abs(projected[j]!) <= rounding) projected[j] = 0
 }
 
 function takeOut(rows: Float64Array, rank: number, vector: Float64Array): void {

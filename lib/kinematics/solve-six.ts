@@ -1,0 +1,47 @@
+import { norm } from '@/lib/math/norm'
+import { factorSix, projectSix, solveSix } from '@/lib/math/six'
+import type { Workspace } from './create-workspace'
+import { rankTolerance, undampedFrom, type Inverse } from './inverse'
+import { fillWish, needSingularValues, type Objective } from './objectives'
+import { zeroRounding, type Solved } from './solve-rates'
+import { TWIST_SIZE, type Task } from './task'
+
+/** Up to this spread (largest times smallest trace, about the square of the condition number) one correction makes the written-out way as
+ *  accurate as a factorisation of the Jacobian itself. */
+const WIDEST = 1e8
+
+/** Rates alone, without rank, singular values and null space, for a task of six components at a pose that is proved to be easy: fills
+ *  work.primary and work.secondary. The trace of (J·Jᵀ)⁻¹ bounds the smallest singular value from below. False, and nothing decided, for
+ *  anything else. `j` is the 6 x n Jacobian. */
+export function solveSixOnly(
+  work: Workspace, j: Float64Array, task: Task, inverse: Inverse, secondary: readonly Objective[], solved: Solved,
+): boolean {
+  const n = work.q.length
+  const damped = inverse.method === 'damped' && inverse.damping > 0
+  if (n < TWIST_SIZE || (damped ? secondary.length > 0 : needSingularValues(secondary))) return false
+  const { six } = work
+  factorSix(j, n, damped ? inverse.damping * inverse.damping : 0, six)
+  const largest = six.sizes[1]! + six.sizes[0]!
+  const inverted = six.sizes[2]!
+  // Written so that a number that is not finite is not easy.
+  if (!(inverted > 0 && largest * inverted < WIDEST)) return false
+  if (!damped) {
+    const floor = undampedFrom(inverse)
+    const tolerance = rankTolerance(inverse)
+    if (!(floor * floor * inverted <= 1 && tolerance * tolerance * largest * inverted < 1)) return false
+  }
+  solveSix(j, n, six, work.asked, work.primary)
+  solved.easy = !damped
+  solved.rank = damped ? 0 : TWIST_SIZE
+  solved.damping = damped ? inverse.damping : 0
+  solved.wished = 0
+  if (secondary.length === 0) {
+    for (let k = 0; k < n; k++) work.secondary[k] = 0
+    return true
+  }
+  fillWish(work, task, TWIST_SIZE, secondary, work.secondary)
+  solved.wished = norm(work.secondary)
+  projectSix(j, n, six, work.secondary)
+  zeroRounding(work.secondary, solved.wished)
+  return true
+}
