@@ -7,8 +7,7 @@ import { toast } from 'sonner'
 import type { Called } from '@/components/api/call'
 import { call } from '@/components/api/call'
 import { Refusal, sentenceOf } from '@/components/api/refusal'
-import { Button } from '@/components/ui/button'
-import { DialogClose } from '@/components/ui/dialog'
+import { DialogActs } from '@/components/ui/dialog-acts'
 import { TextField } from '@/components/ui/text-field'
 import { dayOf, expiryInstant } from './expiry-choice'
 import { ExpiryFields } from './expiry-fields'
@@ -59,17 +58,7 @@ export function KeyEditForm({ team, read, onDone }: KeyEditFormProps) {
     <form onSubmit={submit} noValidate className="space-y-4">
       <TextField label="Label" error={errors.label?.message} autoComplete="off" {...register('label')} />
       <ExpiryFields preset={register('preset')} date={register('date')} chosen={preset} error={errors.date?.message} />
-      <p role="alert" className="font-medium text-verm empty:hidden">
-        {failure}
-      </p>
-      <div className="flex flex-wrap justify-end gap-3">
-        <DialogClose>
-          <Button>Cancel</Button>
-        </DialogClose>
-        <Button type="submit" variant="primary" busy={isSubmitting} busyLabel="Saving…">
-          Save
-        </Button>
-      </div>
+      <DialogActs failure={failure} label="Save" busy={isSubmitting} busyLabel="Saving…" />
     </form>
   )
 }

@@ -6,8 +6,7 @@ import { useForm, useWatch } from 'react-hook-form'
 import type { Answer } from '@/components/api/ask'
 import { call } from '@/components/api/call'
 import { fieldOf, Refusal, sentenceOf } from '@/components/api/refusal'
-import { Button } from '@/components/ui/button'
-import { DialogClose } from '@/components/ui/dialog'
+import { DialogActs } from '@/components/ui/dialog-acts'
 import { TextField } from '@/components/ui/text-field'
 import type { Scope } from '@/lib/contract/key-operations'
 import { expiryInstant } from './expiry-choice'
@@ -53,17 +52,7 @@ export function NewKeyForm({ team, onMade }: NewKeyFormProps) {
       <TextField label="Label" hint="Where it is used, such as Cell 4 gateway." error={errors.label?.message} autoComplete="off" {...register('label')} />
       <ScopeFields field={register('scopes')} error={errors.scopes?.message} />
       <ExpiryFields preset={register('preset')} date={register('date')} chosen={preset} error={errors.date?.message} />
-      <p role="alert" className="font-medium text-verm empty:hidden">
-        {failure}
-      </p>
-      <div className="flex flex-wrap justify-end gap-3">
-        <DialogClose>
-          <Button>Cancel</Button>
-        </DialogClose>
-        <Button type="submit" variant="primary" busy={isSubmitting} busyLabel="Making…">
-          Make the key
-        </Button>
-      </div>
+      <DialogActs failure={failure} label="Make the key" busy={isSubmitting} busyLabel="Making…" />
     </form>
   )
 }

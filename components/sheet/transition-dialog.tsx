@@ -9,8 +9,8 @@ import { toast } from 'sonner'
 import { z } from 'zod'
 import { call } from '@/components/api/call'
 import { sentenceOf } from '@/components/api/refusal'
-import { Button } from '@/components/ui/button'
-import { Dialog, DialogClose } from '@/components/ui/dialog'
+import { Dialog } from '@/components/ui/dialog'
+import { DialogActs } from '@/components/ui/dialog-acts'
 import { TextAreaField } from '@/components/ui/text-area-field'
 import { TextField } from '@/components/ui/text-field'
 import { TransitionQuestion } from '@/lib/contract/model'
@@ -66,17 +66,7 @@ export function TransitionDialog({ path, to, confirmName, caution, trigger }: Tr
         {confirmName === undefined ? null : (
           <TextField label={`Type ${confirmName} to confirm`} error={errors.typed?.message} autoComplete="off" spellCheck={false} {...register('typed')} />
         )}
-        <p role="alert" className="font-medium text-verm empty:hidden">
-          {failure}
-        </p>
-        <div className="flex flex-wrap justify-end gap-3">
-          <DialogClose>
-            <Button>Cancel</Button>
-          </DialogClose>
-          <Button type="submit" variant={to === 'withdrawn' ? 'danger' : 'primary'} busy={isSubmitting} busyLabel={look.busy}>
-            {look.label}
-          </Button>
-        </div>
+        <DialogActs failure={failure} label={look.label} busy={isSubmitting} busyLabel={look.busy} variant={to === 'withdrawn' ? 'danger' : 'primary'} />
       </form>
     </Dialog>
   )
