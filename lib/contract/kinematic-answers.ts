@@ -69,7 +69,7 @@ export const JointRatesResult = z.strictObject({
   rank: z.int().optional(),
   nullity: z.int().optional(),
   damping: z.number().optional().meta({ description: 'lambda' }),
-  saturated: z.array(z.string()).optional().meta({ description: 'Joints held at a rate limit in place of slowing all.' }),
+  saturated: z.array(z.string()).optional().meta({ description: 'Joints held at a bound while the others do their part of the task, or braking.' }),
   manipulability: z.number().nullable().optional(),
   toolSpeed: z.number().optional().meta({ description: "Speed of the tool's reference point, in the length unit per second." }),
   diagnosis: z

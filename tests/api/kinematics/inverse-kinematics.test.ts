@@ -1,5 +1,6 @@
 import { describe, expect, inject, it } from 'vitest'
 import type { Revision } from '@/lib/contract/model'
+import { OPERATIONS } from '@/lib/contract/operations'
 import { numbers } from '../../lib/kinematics/arms'
 import { expectProblem, pointersOf } from '../expect-problem'
 import { get } from '../send'
@@ -58,6 +59,14 @@ describe('a pose that the arm has', () => {
       expect(attempts).toBe(1)
       expect(iterations).toBeLessThanOrEqual(12)
     }
+  })
+
+  it('is the one that the reference shows', async () => {
+    const { example } = OPERATIONS.inverseKinematics
+    const { converged, configuration } = await resultOf('inverse-kinematics', 'skerry-7', example)
+    expect(converged).toBe(true)
+    const { pose } = await resultOf('forward-kinematics', 'skerry-7', { units: SHOP, configurations: [configuration] })
+    expectClose(pose!.position, example.targets[0]!.position, 1.01e-3)
   })
 
   it('is that of example 6.1 of Lynch & Park 2017 (from memory), in degrees', async () => {
