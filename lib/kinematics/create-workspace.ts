@@ -7,7 +7,7 @@ import { prepareChain, type PreparedChain } from './prepared-chain'
 import { createRateBounds, type RateBounds } from './rate-bounds'
 import type { RateScaling } from './rate-scaling'
 import type { Saturation } from './saturate-rates'
-import type { Solved } from './solve-rates'
+import type { Solved } from './solved'
 import { LINEAR_COMPONENTS, TWIST_SIZE } from './task'
 
 /** Scratch for one chain, allocated once and overwritten by each computation; one workspace serves one computation at a time.

@@ -6,18 +6,7 @@ import type { Workspace } from './create-workspace'
 import { fillGains, rankTolerance, undampedFrom, type Inverse } from './inverse'
 import { dampedWeighted, factorWeighted, leastWeighted, projectWeighted } from './joint-weights'
 import { rankOf } from './measures'
-
-/** How the task Jacobian of a pose was solved. */
-export interface Solved {
-  /** Orthonormal rows of n, the first `rank` of which span what the task feels. */
-  rows: Float64Array
-  rank: number
-  damping: number
-  /** Of full rank and nothing damped: then work.taskValues is not filled. */
-  easy: boolean
-  /** The norm of what the objectives ask for, before projection. */
-  wished: number
-}
+import type { Solved } from './solved'
 
 /** Fills work.primary from work.asked: the rates that the inverse gives for the task Jacobian (m x n) in `work`. At an easy pose by a
  *  triangular factorisation, which is as accurate as the singular value decomposition there and much cheaper; that the pose is easy

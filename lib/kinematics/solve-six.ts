@@ -3,7 +3,8 @@ import { factorSix, projectSix, solveSix } from '@/lib/math/six'
 import type { Workspace } from './create-workspace'
 import { rankTolerance, undampedFrom, type Inverse } from './inverse'
 import { fillWish, needSingularValues, type Objective } from './objectives'
-import { zeroRounding, type Solved } from './solve-rates'
+import { zeroRounding } from './solve-rates'
+import type { Solved } from './solved'
 import { TWIST_SIZE, type Task } from './task'
 
 /** Up to this spread (largest times smallest trace, about the square of the condition number) one correction makes the written-out way as
