@@ -14,7 +14,7 @@ import { authenticate, checkOrigin } from './authenticate'
 import { parsePart, pointerOf } from './faults'
 import { checkIfMatch } from './if-match'
 import { problemResponse } from './problem-response'
-import { checkContentType, readForm, readJson } from './read-body'
+import { checkContentType, discardBody, readForm, readJson } from './read-body'
 import { requestId } from './request-id'
 import type { RouteHandler } from './route-handler'
 
@@ -75,6 +75,7 @@ export function endpoint<N extends OperationName>(name: N, useCase: UseCase<N>):
         isFixed: parameters.revision !== 'released',
       })
     } catch (error) {
+      await discardBody(request)
       response = problemResponse(error, mark)
       if (operation.pinned) response.headers.set('link', CAUTIONS)
     }

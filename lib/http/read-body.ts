@@ -26,6 +26,14 @@ async function discard(reader: ReadableStreamDefaultReader<Uint8Array>): Promise
   }
 }
 
+/** Takes the body of a request that is refused before it was read, where it says its length: the connection is closed behind the
+ *  answer, and a client that still sends would lose it. */
+export async function discardBody(request: Request): Promise<void> {
+  if (request.body === null || request.body.locked || request.bodyUsed) return
+  const discarded = discard(request.body.getReader())
+  if (Number(request.headers.get('content-length') ?? Infinity) <= MOST_DISCARDED) await discarded
+}
+
 /** Reads the body up to `most` bytes: fails with too-large. A body that says its length is taken to its end first, so that a
  *  client that closes the connection behind it gets its answer; one that does not is answered while it still sends. */
 async function readBytes(request: Request, most: number, what: string): Promise<Uint8Array> {

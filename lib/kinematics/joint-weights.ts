@@ -44,11 +44,12 @@ export function leastWeighted(work: Workspace, r: number, y: Float64Array, rates
 export function dampedWeighted(work: Workspace, r: number, asked: Float64Array, rates: Float64Array): void {
   const { weightedLower, coordinates, delivered, square, lambdas } = work
   const { values } = work.taskValues
-  // Σ·R·Rᵀ·Σ + Λ²
+  // Σ·R·Rᵀ·Σ + Λ², each row and column divided by the larger of σ and λ, whose squares may be below binary64.
+  const sizeOf = (k: number) => Math.max(values[k]!, lambdas[k]!)
   for (let i = 0; i < r; i++) {
     for (let k = 0; k <= i; k++) {
-      const entry = values[i]! * values[k]! * dot(weightedLower, i * r, weightedLower, k * r, k + 1)
-      square[i * r + k] = entry + (i === k ? lambdas[i]! * lambdas[i]! : 0)
+      const entry = (values[i]! / sizeOf(i)) * (values[k]! / sizeOf(k)) * dot(weightedLower, i * r, weightedLower, k * r, k + 1)
+      square[i * r + k] = entry + (i === k ? (lambdas[i]! / sizeOf(i)) ** 2 : 0)
     }
   }
   factorPositive(square, r)
@@ -56,15 +57,15 @@ export function dampedWeighted(work: Workspace, r: number, asked: Float64Array, 
     coordinates.fill(0)
     coordinates[k] = 1
     solveLower(square, r, coordinates, coordinates)
-    delivered[k] = 1 - lambdas[k]! * lambdas[k]! * dot(coordinates, 0, coordinates, 0, r)
+    delivered[k] = 1 - (lambdas[k]! / sizeOf(k)) ** 2 * dot(coordinates, 0, coordinates, 0, r)
   }
-  for (let k = 0; k < r; k++) coordinates[k] = asked[k]!
+  for (let k = 0; k < r; k++) coordinates[k] = asked[k]! / sizeOf(k)
   solveLower(square, r, coordinates, coordinates)
   solveLowerTransposed(square, r, coordinates)
   // x = Rᵀ·Σ·y
   for (let i = 0; i < r; i++) {
     let sum = 0
-    for (let k = i; k < r; k++) sum += weightedLower[k * r + i]! * values[k]! * coordinates[k]!
+    for (let k = i; k < r; k++) sum += weightedLower[k * r + i]! * (values[k]! / sizeOf(k)) * coordinates[k]!
     coordinates[i] = sum
   }
   spread(work, r, coordinates, rates)

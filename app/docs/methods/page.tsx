@@ -139,7 +139,8 @@ rate ≤ min( limit, A dt (r + m (m + 1) / 2) / (m + 1) )`}</Formula>
       <p>
         A configuration is looked for by damped steps that keep the joint limits, from the seed or the middle of the ranges, then from points of an even
         sequence over the ranges: the same question has the same answer everywhere. What is found is the pose within the tolerances, or the best that was
-        met and why no better: <code>unreachable</code>, <code>at-limits</code> or <code>stalled</code>. Spare freedom is then spent on the objectives. The
+        met and why no better: <code>unreachable</code>, <code>at-limits</code> or <code>stalled</code>. The reason is a judgement
+        from the attempts that were made: more <code>attempts</code> may still find a way. Spare freedom is then spent on the objectives. The
         motion from one configuration to another is not examined.
       </p>
 

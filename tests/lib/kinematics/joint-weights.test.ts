@@ -94,6 +94,14 @@ describe('joint weights', () => {
     expectClose(askRates(threeR, [0, 0, 0], flat(0.1, 0.2), { task: PLANE, inverse: EXACT, jointWeights: weights }).achievedTwist.slice(0, 2), [0, 0.2], 1e-15)
   })
 
+  it('are finite where the squares of singular value and damping lie below binary64', () => {
+    const inverses = [{ method: 'damped', damping: 5e-324 }, { method: 'adaptive-damped', threshold: 1, maxDamping: 1e-200 }, { method: 'filtered', threshold: 1, damping: 1e-200 }] as const
+    for (const inverse of inverses) {
+      const wish = { task: createTask(['vx', 'wy']), inverse, jointWeights: [1, 1, 1] }
+      expect(askRates(threeR, [0, -1e-200, 0], flat(-3, 0), wish).rates.every(Number.isFinite)).toBe(true)
+    }
+  })
+
   it.each([
     [[1, 1], '3 joint weights are needed, 2 were given'],
     [[1, 0, 1], 'positive'],
