@@ -75,7 +75,7 @@ J(i) = [ z ; 0 ]              prismatic`}</Formula>
       <Formula>{`truncated         q̇ = Σ (uᵀv / σ) w    over σ > tolerance · σ₁
 damped            q̇ = Σ σ / (σ² + λ²) (uᵀv) w
 adaptive-damped   λ² = (1 − (σₘ/ε)²) λmax²   where σₘ < ε, else 0
-filtered          λ of its own for each direction with σ < ε, 0 for the others`}</Formula>
+filtered          λ by direction   where σ < ε, else 0`}</Formula>
       <p>
         Damping bounds the rates by <code>|v| / 2λ</code> and pays with accuracy: of the motion along a singular direction, the part{' '}
         <code>λ² / (σ² + λ²)</code> is lost (Nakamura and Hanafusa 1986; Wampler 1986). The adaptive form damps only where the smallest singular value is
