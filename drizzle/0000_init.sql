@@ -45,7 +45,6 @@ CREATE TABLE "transitions" (
 	"by_user" uuid,
 	"at" timestamp (3) with time zone DEFAULT now() NOT NULL,
 	"comment" text,
-	"by_release" boolean DEFAULT false NOT NULL,
 	CONSTRAINT "transitions_revision_id_ordinal_pk" PRIMARY KEY("revision_id","ordinal")
 );
 --> statement-breakpoint

@@ -1,7 +1,7 @@
 import { formatSignificant } from '@/components/ui/format-number'
+import { NEAR_SINGULAR } from '@/lib/kinematics/measures'
 import { degFromRad } from '@/lib/units'
 import type { BenchReading } from './bench-reading'
-import { NEAR_SINGULAR } from './singular-values'
 
 /** The measures of a pose in words and numbers. */
 export function Quality({ reading }: { readonly reading: BenchReading }) {

@@ -1,7 +1,5 @@
 import clsx from 'clsx'
-
-/** Below this the API calls a pose near-singular. */
-export const NEAR_SINGULAR = 0.02
+import { NEAR_SINGULAR } from '@/lib/kinematics/measures'
 
 /** Singular values of the Jacobian as bars, the smallest in amber where the pose is near-singular. */
 export function SingularValueBars({ values }: { readonly values: readonly number[] }) {

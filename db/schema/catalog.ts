@@ -1,5 +1,5 @@
 import { sql } from 'drizzle-orm'
-import { boolean, customType, index, integer, jsonb, pgTable, primaryKey, text, unique, uuid } from 'drizzle-orm/pg-core'
+import { customType, index, integer, jsonb, pgTable, primaryKey, text, unique, uuid } from 'drizzle-orm/pg-core'
 import type { Description, Finding } from '@/lib/urdf/description'
 import { instant, teams, users } from './people'
 
@@ -83,8 +83,6 @@ export const transitions = pgTable(
     byUser: uuid('by_user').references(() => users.id),
     at: instant('at').notNull().defaultNow(),
     comment: text('comment'),
-    /** True where the status follows from another revision's release. */
-    byRelease: boolean('by_release').notNull().default(false),
   },
   (table) => [primaryKey({ columns: [table.revisionId, table.ordinal] })],
 )

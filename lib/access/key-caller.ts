@@ -2,11 +2,11 @@ import { timingSafeEqual } from 'node:crypto'
 import { getDb } from '@/db/client'
 import { findKeyOfAnyTeam, touchKey } from '@/db/queries/keys'
 import { fail } from '@/lib/errors'
-import { log } from '@/lib/log'
 import type { Scope } from '@/lib/contract/key-operations'
 import { sharedBriefCache } from './brief-cache'
 import type { KeyHolder } from './caller'
 import { digestKey, parseKey } from './key-text'
+import { createUseNoter } from './note-use'
 
 const cache = sharedBriefCache('keys', async (id) => findKeyOfAnyTeam(await getDb(), id))
 
@@ -15,17 +15,7 @@ export const forgetKey = (id: string): void => cache.forget(id)
 
 /** Last use is written at most this often for a key. */
 const TOUCH_MS = 10_000
-const touched = new Map<string, number>()
-
-function noteUse(id: string): void {
-  const now = Date.now()
-  if (now - (touched.get(id) ?? 0) < TOUCH_MS) return
-  touched.set(id, now)
-  // Not awaited: a call is never held up by the note of its own use.
-  getDb()
-    .then((db) => touchKey(db, id, new Date(now)))
-    .catch((error: unknown) => log.warn({ keyId: id, error: String(error) }, 'last use not noted'))
-}
+const noteUse = createUseNoter('key', TOUCH_MS, touchKey)
 
 const sameDigest = (a: string, b: string) => timingSafeEqual(Buffer.from(a, 'hex'), Buffer.from(b, 'hex'))
 

@@ -4,16 +4,17 @@ import { getDb } from '@/db/client'
 import { endSession as endSessionRow, findSession, insertSession, touchSession } from '@/db/queries/people'
 import { sessionSecret } from '@/lib/env'
 import { fail } from '@/lib/errors'
-import { log } from '@/lib/log'
 import { sharedBriefCache } from './brief-cache'
 import type { Person } from './caller'
+import { createUseNoter } from './note-use'
 
 /** A session ends this long after sign-in, used or not. */
 export const SESSION_SECONDS = 7 * 24 * 3600
+/** Last use is written at most this often for a session. */
 const TOUCH_MS = 60_000
 
 const cache = sharedBriefCache('sessions', async (id) => findSession(await getDb(), id))
-const touched = new Map<string, number>()
+const noteUse = createUseNoter('session', TOUCH_MS, touchSession)
 
 /** Starts a session and answers the random id that goes into the cookie. */
 export async function startSession(userId: string, agent: string | null): Promise<string> {
@@ -31,15 +32,6 @@ export async function endSession(id: string): Promise<void> {
 /** What next/headers and a NextRequest both offer. */
 export interface CookieJar {
   getAll(): { name: string; value: string }[]
-}
-
-function noteUse(id: string): void {
-  const now = Date.now()
-  if (now - (touched.get(id) ?? 0) < TOUCH_MS) return
-  touched.set(id, now)
-  getDb()
-    .then((db) => touchSession(db, id, new Date(now)))
-    .catch((error: unknown) => log.warn({ error: String(error) }, 'session use not noted'))
 }
 
 /** The person behind the cookies; null without a session cookie. Fails with session-ended when there is one that no longer holds. */

@@ -46,7 +46,7 @@ export const transitionRevision: UseCase<'transitionRevision'> = async (caller, 
       const former = model.released === null ? null : await findRevision(inside, modelId, model.released)
       if (former !== null) {
         const comment = `Revision ${revision.number} was released.`
-        await appendTransition(inside, { ...act, revisionId: former.id, status: 'superseded', comment, byRelease: true })
+        await appendTransition(inside, { ...act, revisionId: former.id, status: 'superseded', comment })
       }
     }
     await appendTransition(inside, { ...act, revisionId: revision.id, status: body.to, comment: body.comment || null })

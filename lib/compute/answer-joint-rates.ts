@@ -19,7 +19,6 @@ import { readObjectives } from './read-objectives'
 import { type Kind, type SiReader, TWIST_KINDS } from './si'
 
 const DEFAULT_GAIN = 1
-const DEFAULT_ADAPTIVE = { threshold: 0.02, maxDamping: 0.05 }
 
 function readInverse(question: InverseQuestion | undefined, read: SiReader): Inverse {
   if (question === undefined) return DEFAULT_INVERSE
@@ -32,8 +31,8 @@ function readInverse(question: InverseQuestion | undefined, read: SiReader): Inv
     case 'adaptive-damped':
       return {
         method: 'adaptive-damped',
-        threshold: si(question.threshold ?? DEFAULT_ADAPTIVE.threshold, 'threshold'),
-        maxDamping: si(question.maxDamping ?? DEFAULT_ADAPTIVE.maxDamping, 'maxDamping'),
+        threshold: si(question.threshold ?? DEFAULT_INVERSE.threshold, 'threshold'),
+        maxDamping: si(question.maxDamping ?? DEFAULT_INVERSE.maxDamping, 'maxDamping'),
       }
     case 'filtered':
       return { method: 'filtered', threshold: si(question.threshold, 'threshold'), damping: si(question.damping, 'damping') }

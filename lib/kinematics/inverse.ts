@@ -11,7 +11,7 @@ export type Inverse =
   | { readonly method: 'filtered'; readonly threshold: number; readonly damping: number }
 
 /** What is used where nothing is said. */
-export const DEFAULT_INVERSE: Inverse = Object.freeze({ method: 'adaptive-damped', threshold: 0.02, maxDamping: 0.05 })
+export const DEFAULT_INVERSE = Object.freeze({ method: 'adaptive-damped', threshold: 0.02, maxDamping: 0.05 } as const satisfies Inverse)
 
 /** The tolerance that decides rank, and with it the null space, which is never taken from a damped inverse. */
 export function rankTolerance(inverse: Inverse): number {
