@@ -1,6 +1,7 @@
 import type { Chain } from '@/lib/kinematics/chain'
 import { createWorkspace, type Workspace } from '@/lib/kinematics/create-workspace'
 import { forwardKinematics } from '@/lib/kinematics/forward-kinematics'
+import { motionAxis } from '@/lib/kinematics/motion-axis'
 import { plus, type Vector } from './vector'
 
 /** A moving joint in the pose that is drawn, m in the base frame. */
@@ -35,15 +36,14 @@ function workspaceOf(chain: Chain): Workspace {
 /** A sliding joint without bounds is drawn with a way of this length to both sides, m. */
 const OPEN_WAY_M = 0.5
 
-const column = (frames: ArrayLike<number>, at: number, k: number): Vector => [frames[at + k]!, frames[at + 4 + k]!, frames[at + 8 + k]!]
+const column = (frame: ArrayLike<number>, k: number): Vector => [frame[k]!, frame[4 + k]!, frame[8 + k]!]
 
 /** The skeleton of `chain` at the configuration `q` (n, SI). */
 export function skeletonOf(chain: Chain, q: ArrayLike<number>): Skeleton {
   const work = workspaceOf(chain)
   forwardKinematics(chain, q, work)
   const nodes = chain.motions.map((motion, i): Node => {
-    const at = column(work.baseFromMotions, 12 * i, 3)
-    const axis = column(work.baseFromMotions, 12 * i, 2)
+    const { along: axis, point: at } = motionAxis(work, i)
     if (motion.rotary) return { rotary: true, axis, at, zero: at, ends: [at, at] }
     const joint = chain.joints[motion.joint]
     const zero = plus(at, axis, -(motion.multiplier * (q[motion.joint] ?? 0) + motion.offset))
@@ -51,5 +51,5 @@ export function skeletonOf(chain: Chain, q: ArrayLike<number>): Skeleton {
     return { rotary: false, axis, at, zero, ends: [end(joint?.lower ?? -OPEN_WAY_M), end(joint?.upper ?? OPEN_WAY_M)] }
   })
   const tip = work.baseFromTip
-  return { nodes, tip: column(tip, 0, 3), tipAxes: [column(tip, 0, 0), column(tip, 0, 1), column(tip, 0, 2)] }
+  return { nodes, tip: column(tip, 3), tipAxes: [column(tip, 0), column(tip, 1), column(tip, 2)] }
 }

@@ -1,7 +1,9 @@
-import { identityTransform, TRANSFORM_SIZE } from '@/lib/math/rigid-transform'
+import { createBidiagonal, type Bidiagonal } from '@/lib/math/bidiagonal'
+import { createValuesRoom, type ValuesRoom } from '@/lib/math/bidiagonal-values'
+import { AXIS_SIZE, FIRST_AXIS } from '@/lib/math/place-axes'
+import { identityTransform } from '@/lib/math/rigid-transform'
 import { createSingularValues, type SingularValues } from '@/lib/math/singular-values'
 import { createSixFactors, type SixFactors } from '@/lib/math/six'
-import { createTriangleRoom, type TriangleRoom } from '@/lib/math/triangle-values'
 import type { Chain } from './chain'
 import { prepareChain, type PreparedChain } from './prepared-chain'
 import { createRateBounds, type RateBounds } from './rate-bounds'
@@ -21,14 +23,15 @@ export interface Workspace {
   readonly angles: Float64Array
   readonly turns: Float64Array
   readonly slides: Float64Array
-  /** A frame (12 numbers) for each motion, after it: the origin lies on its axis, z is along it. */
-  readonly baseFromMotions: Float64Array
+  /** The axis of each motion in the base frame (see placeAxes), after the motion. */
+  readonly motionAxes: Float64Array
   readonly baseFromTip: Float64Array
+  /** Both of them in one, as placeAxes fills them. */
+  readonly placed: Float64Array
   readonly tipFromTool: Float64Array
-  /** Whether tipFromTool is anything but the identity. */
-  hasTool: boolean
-  /** Equal to baseFromTip where no tool was given. */
-  readonly baseFromTool: Float64Array
+  /** baseFromTip itself where no tool was given, toolRoom else. */
+  baseFromTool: Float64Array
+  readonly toolRoom: Float64Array
   /** 6 x n, at the tool point, base axes. */
   readonly jacobian: Float64Array
   /** 6 x n, at the tool point, tool axes. */
@@ -49,6 +52,8 @@ export interface Workspace {
   readonly byRow: Float64Array
   readonly primary: Float64Array
   readonly secondary: Float64Array
+  /** The secondary motion before it was projected. */
+  readonly wish: Float64Array
   /** Joint weights (see prepareWeights): their square roots, and the factors of rows · W^(−½). */
   readonly rootWeights: Float64Array
   readonly scaledRows: Float64Array
@@ -57,7 +62,10 @@ export interface Workspace {
   /** Small squares and vectors of the task's size. */
   readonly square: Float64Array
   readonly coordinates: Float64Array
-  readonly triangle: TriangleRoom
+  readonly bidiagonal: Bidiagonal
+  readonly valuesRoom: ValuesRoom
+  /** See solveWhole. */
+  readonly nullRows: Float64Array
   readonly six: SixFactors
   /** How the task Jacobian was solved (see solvePrimary). */
   readonly solved: Solved
@@ -80,6 +88,9 @@ export function createWorkspace(chain: Chain): Workspace {
   const lost = chain.motions.find((motion) => !(motion.joint in chain.joints))
   if (lost !== undefined) throw new RangeError(`motion '${lost.name}' follows a joint that the chain does not have`)
   const prepared = prepareChain(chain)
+  const placed = new Float64Array(FIRST_AXIS + AXIS_SIZE * chain.motions.length)
+  const baseFromTip = placed.subarray(0, FIRST_AXIS)
+  baseFromTip.set(identityTransform())
   return {
     chain,
     prepared,
@@ -87,11 +98,12 @@ export function createWorkspace(chain: Chain): Workspace {
     angles: prepared.rest.slice(),
     turns: new Float64Array(2 * chain.motions.length),
     slides: new Float64Array(chain.motions.length),
-    baseFromMotions: new Float64Array(TRANSFORM_SIZE * chain.motions.length),
-    baseFromTip: identityTransform(),
+    motionAxes: placed.subarray(FIRST_AXIS),
+    baseFromTip,
+    placed,
     tipFromTool: identityTransform(),
-    hasTool: false,
-    baseFromTool: identityTransform(),
+    baseFromTool: baseFromTip,
+    toolRoom: identityTransform(),
     jacobian: new Float64Array(TWIST_SIZE * n),
     tipJacobian: new Float64Array(TWIST_SIZE * n),
     taskJacobian: new Float64Array(TWIST_SIZE * n),
@@ -105,14 +117,17 @@ export function createWorkspace(chain: Chain): Workspace {
     byRow: new Float64Array(TWIST_SIZE),
     primary: new Float64Array(n),
     secondary: new Float64Array(n),
+    wish: new Float64Array(n),
     rootWeights: new Float64Array(n),
     scaledRows: new Float64Array(TWIST_SIZE * n),
     weightedRows: new Float64Array(TWIST_SIZE * n),
     weightedLower: new Float64Array(TWIST_SIZE * TWIST_SIZE),
     square: new Float64Array(TWIST_SIZE * TWIST_SIZE),
     coordinates: new Float64Array(TWIST_SIZE),
-    solved: { rows: NO_ROWS, rank: 0, damping: 0, easy: false, wished: 0 },
-    triangle: createTriangleRoom(TWIST_SIZE),
+    solved: { jacobian: NO_ROWS, rows: NO_ROWS, nullRows: null, rank: 0, damping: 0, easy: false, wished: 0 },
+    bidiagonal: createBidiagonal(Math.max(TWIST_SIZE, n)),
+    valuesRoom: createValuesRoom(TWIST_SIZE),
+    nullRows: new Float64Array(TWIST_SIZE * n),
     six: createSixFactors(),
     bounds: createRateBounds(n),
     scaling: { scale: 1, secondaryScale: 1 },

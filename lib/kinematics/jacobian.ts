@@ -1,4 +1,4 @@
-import { TRANSFORM_SIZE } from '@/lib/math/rigid-transform'
+import { AXIS_SIZE } from '@/lib/math/place-axes'
 import { addSliding, addTurning, fillColumns, turnIntoFrame } from '@/lib/math/twist-columns'
 import type { Chain } from './chain'
 import type { Workspace } from './create-workspace'
@@ -9,19 +9,19 @@ import type { TaskFrame } from './task'
  *  times its multiplier, to the column of the joint it follows. Returns the array of `work` that holds it. Whitney 1972. */
 export function jacobian(chain: Chain, work: Workspace, frame: TaskFrame = 'base'): Float64Array {
   const n = chain.joints.length
-  if (work.prepared.plain) fillColumns(work.baseFromMotions, work.prepared.rotary, work.baseFromTool, n, work.jacobian)
+  if (work.prepared.plain) fillColumns(work.motionAxes, work.prepared.rotary, work.baseFromTool, n, work.jacobian)
   else addColumns(work, n)
   if (frame === 'base') return work.jacobian
   turnIntoFrame(work.baseFromTool, work.jacobian, n, work.tipJacobian)
   return work.tipJacobian
 }
 
-function addColumns({ prepared, baseFromMotions, baseFromTool, jacobian: out }: Workspace, n: number): void {
+function addColumns({ prepared, motionAxes, baseFromTool, jacobian: out }: Workspace, n: number): void {
   const { rotary, joint, multiplier } = prepared
   out.fill(0)
   for (let i = 0; i < rotary.length; i++) {
-    const at = TRANSFORM_SIZE * i
-    if (rotary[i] === 1) addTurning(baseFromMotions, at, baseFromTool, multiplier[i]!, out, n, joint[i]!)
-    else addSliding(baseFromMotions, at, multiplier[i]!, out, n, joint[i]!)
+    const at = AXIS_SIZE * i
+    if (rotary[i] === 1) addTurning(motionAxes, at, baseFromTool, multiplier[i]!, out, n, joint[i]!)
+    else addSliding(motionAxes, at, multiplier[i]!, out, n, joint[i]!)
   }
 }

@@ -4,9 +4,10 @@ import { fillRateBounds, type RateLimits } from './rate-bounds'
 import type { RateRecord } from './rate-record'
 import { scaleToBounds } from './rate-scaling'
 import { createSaturation, saturateRates } from './saturate-rates'
+import { taskRows } from './solve-rates'
 import { TWIST_SIZE } from './task'
 
-/** Fills record.rates, scale, secondaryScale and saturated from its primary and secondary rates, within the limits. What is given up,
+/** Fills the record's rates, scale, secondaryScale and saturated from the primary and secondary rates in `work`, within the limits. What is given up,
  *  in this order: the secondary motion; under 'saturate' the even share of the joints, those at a bound being relieved by the others;
  *  the speed of the task. Bounds that no speed of the task keeps (a joint that cannot brake to where the others are) make every joint
  *  come as near to standing still as its bounds let it: then both scales are 0 and the joints that still move are the saturated ones. */
@@ -14,7 +15,7 @@ export function limitRates(
   chain: Chain, work: Workspace, limits: RateLimits, weighted: boolean, previousRates: ArrayLike<number> | undefined, record: RateRecord,
 ): void {
   const { bounds, scaling } = work
-  const within = addBoth(work.prepared.rate, limits.derating, record)
+  const within = addBoth(work, limits.derating, record)
   if (limits.rates === 'report') return
   checkLength(chain, limits.derating, 'deratings')
   checkLength(chain, limits.accelerations, 'accelerations')
@@ -25,8 +26,7 @@ export function limitRates(
   const kept = scaleToBounds(bounds, record.primaryRates, record.secondaryRates, scaling)
   if (limits.rates === 'saturate' && (!kept || scaling.scale < 1)) {
     const room = (work.saturation ??= createSaturation(TWIST_SIZE, work.q.length))
-    const { rows, rank } = work.solved
-    const best = saturateRates(rows, rank, record.primaryRates, bounds, weighted ? work.rootWeights : null, room)
+    const best = saturateRates(taskRows(work), work.solved.rank, record.primaryRates, bounds, weighted ? work.rootWeights : null, room)
     // Evenly slowed rates may be faster, where the secondary motion takes load off the joint that binds.
     if (best >= 0 && (!kept || (best > scaling.scale && room.saturated.includes(1)))) {
       record.scale = best
@@ -42,12 +42,18 @@ export function limitRates(
 }
 
 /** Fills the record with both motions whole; true where they are known to be within the rate limits, times one derating for all. */
-function addBoth(rate: Float64Array, derating: number | ArrayLike<number>, record: RateRecord): boolean {
+function addBoth({ primary, secondary, prepared }: Workspace, derating: number | ArrayLike<number>, record: RateRecord): boolean {
   const { rates, primaryRates, secondaryRates, saturated } = record
+  const { rate } = prepared
   const part = typeof derating === 'number' ? derating : 0
   let within = true
   for (let j = 0; j < rate.length; j++) {
-    const sum = primaryRates[j]! + secondaryRates[j]! + 0
+    // Adding 0 turns −0 into 0, which is the same number and looks less odd on the wire.
+    const first = primary[j]! + 0
+    const second = secondary[j]! + 0
+    const sum = first + second
+    primaryRates[j] = first
+    secondaryRates[j] = second
     rates[j] = sum
     saturated[j] = 0
     if (!(Math.abs(sum) <= rate[j]! * part)) within = false

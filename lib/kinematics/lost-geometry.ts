@@ -1,10 +1,10 @@
-import { columnOf } from '@/lib/math/column-of'
 import { cross, distanceToLine, inLine, inner, lengthOf, meetingPoint, plus, type Line, type Triple } from '@/lib/math/lines'
-import { TRANSFORM_SIZE } from '@/lib/math/rigid-transform'
+import { positionOf } from '@/lib/math/rigid-transform'
 import { turnOutOfFrame } from '@/lib/math/twist-columns'
 import type { Chain } from './chain'
 import type { Workspace } from './create-workspace'
 import type { LostPart } from './lost-parts'
+import { motionAxis } from './motion-axis'
 import { LINEAR_COMPONENTS, type Task } from './task'
 
 /** Within this (m) lines meet and points lie on them; also the pitch (m) up to which a direction counts as a line. */
@@ -33,17 +33,16 @@ export function lostGeometry(chain: Chain, work: Workspace, task: Task, part: Lo
   const squared = size * size
   if (Math.abs(inner(force, moment)) > MEETS * squared) return ''
   const along: Triple = [force[0] / size, force[1] / size, force[2] / size]
-  const tool = columnOf(work.baseFromTool, 0, 3)
+  const tool = positionOf(work.baseFromTool)
   const line: Line = { point: plus(tool, cross(force, moment), 1 / squared), along }
   return radialWords(axes, line, lengthOf(moment) < NOTHING ? tool : null, part.asked)
 }
 
-function rotaryAxes(chain: Chain, { baseFromMotions }: Workspace): Axis[] {
+function rotaryAxes(chain: Chain, work: Workspace): Axis[] {
   return chain.motions.flatMap(({ name, rotary, link }, i): Axis[] => {
     if (!rotary) return []
-    const at = TRANSFORM_SIZE * i
     const before = i === 0 ? chain.base : chain.motions[i - 1]!.link
-    return [{ name, before, link, point: columnOf(baseFromMotions, at, 3), along: columnOf(baseFromMotions, at, 2) }]
+    return [{ name, before, link, ...motionAxis(work, i) }]
   })
 }
 

@@ -1,4 +1,4 @@
-import { TRANSFORM_SIZE } from '@/lib/math/rigid-transform'
+import { AXIS_SIZE } from '@/lib/math/place-axes'
 import { addSliding, addTurning } from '@/lib/math/twist-columns'
 import type { Workspace } from './create-workspace'
 import { TWIST_SIZE } from './task'
@@ -7,13 +7,13 @@ import { TWIST_SIZE } from './task'
  *  Jacobian before those of one coordinate are added up. */
 export function motionTwists(work: Workspace): Float64Array {
   const { rotary, multiplier } = work.prepared
-  const { baseFromMotions, baseFromTool, motionTwists: out } = work
+  const { motionAxes, baseFromTool, motionTwists: out } = work
   out.fill(0)
   for (let i = 0; i < rotary.length; i++) {
-    const at = TRANSFORM_SIZE * i
+    const at = AXIS_SIZE * i
     // One column of six numbers after the other, so that a row is one number long.
-    if (rotary[i] === 1) addTurning(baseFromMotions, at, baseFromTool, multiplier[i]!, out, 1, TWIST_SIZE * i)
-    else addSliding(baseFromMotions, at, multiplier[i]!, out, 1, TWIST_SIZE * i)
+    if (rotary[i] === 1) addTurning(motionAxes, at, baseFromTool, multiplier[i]!, out, 1, TWIST_SIZE * i)
+    else addSliding(motionAxes, at, multiplier[i]!, out, 1, TWIST_SIZE * i)
   }
   return out
 }

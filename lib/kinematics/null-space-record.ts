@@ -1,4 +1,4 @@
-import { createBasisRoom, fillCanonicalBasis, type BasisRoom } from '@/lib/math/canonical-basis'
+import { createBasisRoom, fillCanonicalBasis, makeCanonical, type BasisRoom } from '@/lib/math/canonical-basis'
 import type { Chain } from './chain'
 import type { Workspace } from './create-workspace'
 import { TWIST_SIZE } from './task'
@@ -22,17 +22,27 @@ export function createNullSpaceRecord(chain: Chain): NullSpaceRecord {
 
 /** Fills `record` with the null space that the last resolveRatesInto met in `work`, by the same factors and the same rank. */
 export function fillNullSpace(work: Workspace, record: NullSpaceRecord): void {
-  const { rows, rank } = work.solved
+  const { rows, nullRows, rank } = work.solved
   const { basis, projector, room } = record
   const n = work.q.length
   record.nullity = n - rank
-  fillCanonicalBasis(rows, n, rank, room, basis)
-  for (let i = 0; i < n; i++) {
-    for (let j = 0; j <= i; j++) {
-      let sum = i === j ? 1 : 0
-      for (let at = 0; at < rank * n; at += n) sum -= rows[at + i]! * rows[at + j]!
-      projector[i * n + j] = sum
-      projector[j * n + i] = sum
+  if (nullRows === null) {
+    fillCanonicalBasis(rows, n, rank, room, basis)
+    addProducts(rows, rank, n, 1, -1, projector)
+  } else {
+    makeCanonical(nullRows, n, n - rank, room, basis)
+    addProducts(nullRows, n - rank, n, 0, 1, projector)
+  }
+}
+
+/** out (n x n) = unit · I + sign · Σ row·rowᵀ over `count` rows of n. */
+function addProducts(rows: Float64Array, count: number, n: number, unit: number, sign: number, out: Float64Array): void {
+  for (let at = 0; at < n * n; at++) out[at] = 0
+  for (let i = 0; i < n; i++) out[i * n + i] = unit
+  for (let at = 0; at < count * n; at += n) {
+    for (let i = 0; i < n; i++) {
+      const part = sign * rows[at + i]!
+      for (let j = 0; j < n; j++) out[i * n + j]! += part * rows[at + j]!
     }
   }
 }

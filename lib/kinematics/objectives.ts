@@ -23,11 +23,11 @@ export function needSingularValues(objectives: readonly Objective[]): boolean {
  *  projection. Where needSingularValues, work.taskValues holds those of the task, with the given rank.
  *  Throws a RangeError when a posture has another length. Liégeois 1977. */
 export function fillWish(work: Workspace, task: Task, rank: number, objectives: readonly Objective[], wish: Float64Array): void {
-  wish.fill(0)
+  for (let i = 0; i < wish.length; i++) wish[i] = 0
   for (const objective of objectives) {
     switch (objective.objective) {
       case 'posture':
-        addPosture(work.chain, work.q, objective.posture, objective.gain, wish)
+        addPosture(work, objective.posture, objective.gain, wish)
         break
       case 'mid-range':
         addMidRange(work.chain, work.q, objective.gain, wish)
@@ -39,11 +39,12 @@ export function fillWish(work: Workspace, task: Task, rank: number, objectives: 
 }
 
 /** −gain·(q − posture), the short way round on continuous joints only: a revolute joint cannot go round. */
-function addPosture(chain: Chain, q: ArrayLike<number>, posture: ArrayLike<number>, gain: number, wish: Float64Array): void {
+function addPosture({ prepared, q }: Workspace, posture: ArrayLike<number>, gain: number, wish: Float64Array): void {
+  const { continuous } = prepared
   if (posture.length !== wish.length) throw new RangeError(`a posture needs ${wish.length} joint values, ${posture.length} were given`)
   for (let i = 0; i < wish.length; i++) {
     const difference = q[i]! - posture[i]!
-    wish[i]! -= gain * (chain.joints[i]!.type === 'continuous' ? shortWayRound(difference) : difference)
+    wish[i]! -= gain * (continuous[i] === 1 ? shortWayRound(difference) : difference)
   }
 }
 

@@ -1,19 +1,16 @@
 import { axisFrame } from '@/lib/math/axis-frame'
 import { norm } from '@/lib/math/norm'
-import { STEP_SIZE } from '@/lib/math/place-frames'
+import { FIRST_STEP, STEP_SIZE } from '@/lib/math/place-axes'
 import { identityTransform, invertTransform, multiplyTransforms, TRANSFORM_SIZE } from '@/lib/math/rigid-transform'
 import { stepBetweenAxes } from '@/lib/math/step-between-axes'
 import type { Chain } from './chain'
 
 /** The numeric form of a chain: flat arrays, one entry a motion. Its frames are laid so that each motion is about or along its own z,
- *  and that from one to the next there is only a shift and a turn about x (see placeFrames). Turns about z that the description has
+ *  and that from one to the next there is only a shift and a turn about x (see placeAxes). Turns about z that the description has
  *  in between belong to the motions: whole quarter turns, which are exact, and what is left of them. */
 export interface PreparedChain {
-  /** Transforms of 12 numbers: to the first motion, and from the last motion to the tip. */
-  readonly baseFromFirst: Float64Array
-  readonly lastFromTip: Float64Array
-  /** STEP_SIZE numbers a motion. */
-  readonly steps: Float64Array
+  /** What placeAxes needs to know: the transforms to the first motion and from the last one to the tip, and a step for each motion. */
+  readonly constants: Float64Array
   /** 1 turns, 0 slides. */
   readonly rotary: Uint8Array
   /** The coordinate that a motion follows. */
@@ -24,6 +21,8 @@ export interface PreparedChain {
   readonly quarters: Int32Array
   /** rad, what each motion turns by at 0: a slide too turns by the rest of its placement, and no more. */
   readonly rest: Float64Array
+  /** Of each coordinate: 1 where it may go round and round. */
+  readonly continuous: Uint8Array
   /** Of each coordinate, rad/s or m/s; Infinity where it is not known. */
   readonly rate: Float64Array
   /** Whether there is one motion for each coordinate, in order, with multiplier 1: then no column of a Jacobian is a sum. */
@@ -41,8 +40,10 @@ export function prepareChain(chain: Chain): PreparedChain {
   const { motions } = chain
   const count = motions.length
   if (chain.constants.length !== count + 1) throw new RangeError('a chain needs one constant more than it has motions')
-  const constants = uprightConstants(chain)
-  const steps = new Float64Array(STEP_SIZE * count)
+  const upright = uprightConstants(chain)
+  const constants = new Float64Array(FIRST_STEP + STEP_SIZE * count)
+  constants.set(upright[0]!)
+  constants.set(count === 0 ? identityTransform() : upright[count]!, TRANSFORM_SIZE)
   const quarters = new Int32Array(count)
   const rest = new Float64Array(count)
   const addTurn = (motion: number, angle: number): void => {
@@ -53,24 +54,23 @@ export function prepareChain(chain: Chain): PreparedChain {
   }
   for (let i = 0; i < count; i++) {
     // The first motion stands where its own placement puts it.
-    if (i === 0) steps[0] = 1
+    if (i === 0) constants[FIRST_STEP] = 1
     else {
-      const { first, last } = stepBetweenAxes(constants[i]!, steps, STEP_SIZE * i)
+      const { first, last } = stepBetweenAxes(upright[i]!, constants, FIRST_STEP + STEP_SIZE * i)
       addTurn(i - 1, first)
       addTurn(i, last)
     }
   }
   const plain = count === chain.joints.length && motions.every(({ joint, multiplier }, i) => joint === i && multiplier === 1)
   return {
-    baseFromFirst: constants[0]!,
-    lastFromTip: count === 0 ? identityTransform() : constants[count]!,
-    steps,
+    constants,
     rotary: Uint8Array.from(motions, (motion) => (motion.rotary ? 1 : 0)),
     joint: Int32Array.from(motions, (motion) => motion.joint),
     multiplier: Float64Array.from(motions, (motion) => motion.multiplier),
     offset: Float64Array.from(motions, (motion, i) => (motion.rotary ? motion.offset + rest[i]! : motion.offset)),
     quarters,
     rest,
+    continuous: Uint8Array.from(chain.joints, ({ type }) => (type === 'continuous' ? 1 : 0)),
     rate: Float64Array.from(chain.joints, ({ rate }) => (rate !== null && rate > 0 ? rate : Number.POSITIVE_INFINITY)),
     plain,
     turning: plain && motions.every(({ rotary, offset }, i) => rotary && offset === 0 && rest[i] === 0),

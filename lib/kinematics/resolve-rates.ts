@@ -1,7 +1,8 @@
 import { dot } from '@/lib/math/dot'
 import { norm } from '@/lib/math/norm'
 import { decompose } from '@/lib/math/singular-values'
-import { triangleValues } from '@/lib/math/triangle-values'
+import { bidiagonalise } from '@/lib/math/bidiagonal'
+import { bidiagonalValues } from '@/lib/math/bidiagonal-values'
 import type { Chain } from './chain'
 import type { Workspace } from './create-workspace'
 import { diagnose } from './diagnose'
@@ -14,8 +15,10 @@ import type { Instant, RatePolicy } from './rate-policy'
 import { createRateRecord, type RateRecord } from './rate-record'
 import { projectSecondary, solvePrimary } from './solve-rates'
 import { solveSixOnly } from './solve-six'
+import { solveWhole } from './solve-whole'
 import { LINEAR_COMPONENTS, TWIST_SIZE } from './task'
 import { copyTaskRows } from './task-jacobian'
+import { fillTwist } from '@/lib/math/twist-columns'
 
 /** Joint rates and what became of the twist that was asked for. SI; twists at the tool point in the task's frame. */
 export interface RateOutcome {
@@ -87,39 +90,36 @@ export function resolveRatesInto(
 ): void {
   if (twist.length !== TWIST_SIZE) throw new RangeError(`a twist has ${TWIST_SIZE} components, ${twist.length} were given`)
   const { task, inverse, jointWeights, secondary } = policy
-  const n = chain.joints.length
   const m = task.rows.length
   const whole = jacobian(chain, work, task.frame)
-  for (let k = 0; k < m; k++) work.asked[k] = twist[task.rows[k]!]!
+  if (m === TWIST_SIZE) for (let k = 0; k < TWIST_SIZE; k++) work.asked[k] = twist[k]!
+  else for (let k = 0; k < m; k++) work.asked[k] = twist[task.rows[k]!]!
   const weighted = jointWeights !== undefined
   if (weighted) prepareWeights(work, jointWeights)
 
   const { solved } = work
   const only = detail === 'rates' && m === TWIST_SIZE && !weighted && policy.limits.rates !== 'saturate'
   if (!(only && solveSixOnly(work, whole, task, inverse, secondary, solved))) {
-    copyTaskRows(work, whole, task)
-    solvePrimary(work, m, inverse, weighted, needSingularValues(secondary), solved)
+    const needValues = needSingularValues(secondary)
+    if (m < TWIST_SIZE) copyTaskRows(work, whole, task)
+    const rows = m < TWIST_SIZE ? work.taskJacobian : whole
+    const done = detail === 'all' && !weighted && !needValues && solveWhole(work, rows, m, inverse, solved, record.singularValues)
+    if (!done) {
+      if (m === TWIST_SIZE) copyTaskRows(work, whole, task)
+      solvePrimary(work, m, inverse, weighted, needValues, solved)
+      if (detail === 'all') fillSingularValues(work, m, record)
+    }
     fillWish(work, task, solved.rank, secondary, work.secondary)
     projectSecondary(work, solved, weighted)
   }
   record.easy = solved.easy
   record.rank = solved.rank
   record.damping = solved.damping
-  if (detail === 'all') fillSingularValues(work, m, record)
-  // Adding 0 turns −0 into 0, which is the same number and looks less odd on the wire.
-  for (let j = 0; j < n; j++) {
-    record.primaryRates[j] = work.primary[j]! + 0
-    record.secondaryRates[j] = work.secondary[j]! + 0
-  }
   limitRates(chain, work, policy.limits, weighted, instant.previousRates, record)
 
   if (detail === 'rates') return
-  for (let row = 0; row < TWIST_SIZE; row++) {
-    let achieved = 0
-    for (let j = 0; j < n; j++) achieved += whole[row * n + j]! * record.rates[j]!
-    record.achievedTwist[row] = achieved
-    record.residual[row] = 0
-  }
+  fillTwist(whole, record.rates, record.achievedTwist)
+  for (let row = 0; row < TWIST_SIZE; row++) record.residual[row] = 0
   for (let k = 0; k < m; k++) {
     const row = task.rows[k]!
     record.residual[row] = record.achievedTwist[row]! - twist[row]!
@@ -128,7 +128,8 @@ export function resolveRatesInto(
 
 function fillSingularValues(work: Workspace, m: number, record: RateRecord): void {
   if (work.solved.easy) {
-    if (triangleValues(work.lower, m, work.triangle, record.singularValues)) return
+    bidiagonalise(work.lower, m, m, work.bidiagonal)
+    if (bidiagonalValues(work.bidiagonal.diagonal, work.bidiagonal.beside, m, work.valuesRoom, record.singularValues)) return
     decompose(work.taskJacobian, m, work.q.length, work.taskValues)
   }
   for (let k = 0; k < Math.min(m, work.q.length); k++) record.singularValues[k] = work.taskValues.values[k]!
@@ -136,6 +137,6 @@ function fillSingularValues(work: Workspace, m: number, record: RateRecord): voi
 
 function leakOf(work: Workspace, m: number, record: RateRecord): number {
   const n = work.q.length
-  for (let k = 0; k < m; k++) work.coordinates[k] = record.secondaryScale * dot(work.taskJacobian, k * n, record.secondaryRates, 0, n)
+  for (let k = 0; k < m; k++) work.coordinates[k] = record.secondaryScale * dot(work.solved.jacobian, k * n, record.secondaryRates, 0, n)
   return norm(work.coordinates, 0, m)
 }

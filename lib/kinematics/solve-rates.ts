@@ -12,6 +12,8 @@ import type { Solved } from './solved'
  *  triangular factorisation, which is as accurate as the singular value decomposition there and much cheaper; that the pose is easy
  *  is proved by a bound on the smallest singular value, and everything else goes the long way. `weighted`: see prepareWeights. */
 export function solvePrimary(work: Workspace, m: number, inverse: Inverse, weighted: boolean, needValues: boolean, solved: Solved): void {
+  solved.jacobian = work.taskJacobian
+  solved.nullRows = null
   solved.easy = !needValues && isEasy(work, m, inverse)
   if (solved.easy) {
     solved.rows = work.rows
@@ -45,8 +47,18 @@ export function solvePrimary(work: Workspace, m: number, inverse: Inverse, weigh
   }
 }
 
-/** Below this the squares that the easy way forms underflow. */
-const SMALLEST = 1e-100
+/** Orthonormal rows of n, `solved.rank` of them, that span what the task feels as it was solved last. */
+export function taskRows(work: Workspace): Float64Array {
+  const { solved, rows, lower, taskValues } = work
+  if (solved.nullRows === null) return solved.rows
+  const n = work.q.length
+  if (factorRows(solved.jacobian, solved.rank, n, rows, lower)) return rows
+  decompose(solved.jacobian, solved.rank, n, taskValues)
+  return taskValues.right
+}
+
+/** Below this the squares that the easy ways form underflow. */
+export const SMALLEST = 1e-100
 
 /** Factors the task Jacobian into work.lower and work.rows, and says whether the pose is proved to be easy. */
 function isEasy(work: Workspace, m: number, inverse: Inverse): boolean {
@@ -77,9 +89,14 @@ const PROJECTION_ROUNDING = 64 * Number.EPSILON
  *  orthonormal to the last bits, twice, so that what rounding leaves of the first pass is taken out too. */
 export function projectSecondary(work: Workspace, solved: Solved, weighted: boolean): void {
   const { secondary } = work
-  const { rows, rank } = solved
+  const { rows, nullRows, rank } = solved
   solved.wished = norm(secondary)
   if (solved.wished === 0) return
+  if (nullRows !== null) {
+    keepOnly(nullRows, secondary.length - rank, secondary, work.wish)
+    zeroRounding(secondary, solved.wished)
+    return
+  }
   for (let pass = solved.easy && !weighted ? 1 : 0; pass < 2; pass++) {
     if (weighted) projectWeighted(work, rank, secondary)
     else takeOut(rows, rank, secondary)
@@ -91,6 +108,20 @@ export function projectSecondary(work: Workspace, solved: Solved, weighted: bool
 export function zeroRounding(projected: Float64Array, size: number): void {
   const rounding = PROJECTION_ROUNDING * size
   for (let j = 0; j < projected.length; j++) if (Math.abs(projected[j]!) <= rounding) projected[j] = 0
+}
+
+/** vector = its parts along `count` orthonormal rows. */
+function keepOnly(rows: Float64Array, count: number, vector: Float64Array, scratch: Float64Array): void {
+  const n = vector.length
+  for (let j = 0; j < n; j++) {
+    scratch[j] = vector[j]!
+    vector[j] = 0
+  }
+  for (let at = 0; at < count * n; at += n) {
+    let along = 0
+    for (let j = 0; j < n; j++) along += rows[at + j]! * scratch[j]!
+    for (let j = 0; j < n; j++) vector[j]! += along * rows[at + j]!
+  }
 }
 
 function takeOut(rows: Float64Array, rank: number, vector: Float64Array): void {

@@ -1,5 +1,5 @@
 import { norm } from '@/lib/math/norm'
-import { factorSix, projectSix, solveSix } from '@/lib/math/six'
+import { factorSix, fillInverseTrace, projectSix, solveSix } from '@/lib/math/six'
 import type { Workspace } from './create-workspace'
 import { rankTolerance, undampedFrom, type Inverse } from './inverse'
 import { fillWish, needSingularValues, type Objective } from './objectives'
@@ -7,9 +7,10 @@ import { zeroRounding } from './solve-rates'
 import type { Solved } from './solved'
 import { TWIST_SIZE, type Task } from './task'
 
-/** Up to this spread (largest times smallest trace, about the square of the condition number) one correction makes the written-out way as
- *  accurate as a factorisation of the Jacobian itself. */
+/** Up to this square of the condition number one correction makes the written-out way as accurate as a factorisation of the Jacobian
+ *  itself, and up to this much less it is so without: what is lost stays below 1e-13 of the rates. */
 const WIDEST = 1e8
+const WIDE = 4e3
 
 /** Rates alone, without rank, singular values and null space, for a task of six components at a pose that is proved to be easy: fills
  *  work.primary and work.secondary. The trace of (J·Jᵀ)⁻¹ bounds the smallest singular value from below. False, and nothing decided, for
@@ -21,17 +22,25 @@ export function solveSixOnly(
   const damped = inverse.method === 'damped' && inverse.damping > 0
   if (n < TWIST_SIZE || (damped ? secondary.length > 0 : needSingularValues(secondary))) return false
   const { six } = work
-  factorSix(j, n, damped ? inverse.damping * inverse.damping : 0, six)
-  const largest = six.sizes[1]! + six.sizes[0]!
-  const inverted = six.sizes[2]!
-  // Written so that a number that is not finite is not easy.
-  if (!(inverted > 0 && largest * inverted < WIDEST)) return false
-  if (!damped) {
-    const floor = undampedFrom(inverse)
-    const tolerance = rankTolerance(inverse)
-    if (!(floor * floor * inverted <= 1 && tolerance * tolerance * largest * inverted < 1)) return false
+  const squared = damped ? inverse.damping * inverse.damping : 0
+  factorSix(j, n, squared, six)
+  // Bounds of the largest and the smallest square of a singular value, and of the square of the condition number. Each comparison is
+  // written so that a number that is not finite is not easy.
+  const largest = six.sizes[1]! + squared
+  let spread = largest / squared
+  if (!(spread < WIDE)) {
+    fillInverseTrace(six)
+    const inverted = six.sizes[2]!
+    spread = largest * inverted
+    if (!(inverted > 0 && spread < WIDEST)) return false
+    if (!damped) {
+      const floor = undampedFrom(inverse)
+      const tolerance = rankTolerance(inverse)
+      if (!(floor * floor * inverted <= 1 && tolerance * tolerance * spread < 1)) return false
+    }
   }
-  solveSix(j, n, six, work.asked, work.primary)
+  const corrections = spread < WIDE ? 0 : 1
+  solveSix(j, n, six, work.asked, work.primary, corrections)
   solved.easy = !damped
   solved.rank = damped ? 0 : TWIST_SIZE
   solved.damping = damped ? inverse.damping : 0
@@ -42,7 +51,7 @@ export function solveSixOnly(
   }
   fillWish(work, task, TWIST_SIZE, secondary, work.secondary)
   solved.wished = norm(work.secondary)
-  projectSix(j, n, six, work.secondary)
+  projectSix(j, n, six, work.secondary, corrections)
   zeroRounding(work.secondary, solved.wished)
   return true
 }

@@ -98,3 +98,46 @@ function firstLargeColumn(rows: Float64Array, sizes: Float64Array, left: Uint8Ar
   while (left[pivot] === 0 || sizes[pivot]! < threshold) pivot++
   return pivot
 }
+
+/** The same basis where k = n − r orthonormal rows of n numbers that span it are at hand: each step turns them so that the first row is
+ *  along the pivot's column of the projector rowsᵀ·rows and the others have no component there. */
+export function makeCanonical(nullRows: Float64Array, n: number, k: number, room: BasisRoom, out: Float64Array): void {
+  const { sizes, q } = room
+  for (let at = 0; at < k * n; at++) out[at] = nullRows[at]!
+  for (let found = 0; found < k; found++) {
+    const pivot = firstLarge(out, sizes, n, found, k)
+    const first = found * n
+    let squares = 0
+    for (let row = found; row < k; row++) {
+      q[row] = out[row * n + pivot]!
+      squares += q[row]! * q[row]!
+    }
+    const length = q[found]! > 0 ? -Math.sqrt(squares) : Math.sqrt(squares)
+    if (found < k - 1) {
+      q[found]! -= length
+      const scale = 1 / (squares - length * (q[found]! + length))
+      for (let i = 0; i < n; i++) {
+        let sum = 0
+        for (let row = found; row < k; row++) sum += q[row]! * out[row * n + i]!
+        sum *= scale
+        for (let row = found; row < k; row++) out[row * n + i]! -= sum * q[row]!
+      }
+      for (let row = found + 1; row < k; row++) out[row * n + pivot] = 0
+      out[first + pivot] = length
+    }
+    if (out[first + pivot]! < 0) for (let i = 0; i < n; i++) out[first + i] = 0 - out[first + i]!
+  }
+}
+
+function firstLarge(rows: Float64Array, sizes: Float64Array, n: number, from: number, to: number): number {
+  let largest = 0
+  for (let i = 0; i < n; i++) {
+    let size = 0
+    for (let at = from * n + i; at < to * n; at += n) size += rows[at]! * rows[at]!
+    sizes[i] = size
+    if (size > largest) largest = size
+  }
+  let pivot = 0
+  while (sizes[pivot]! < PIVOT_PART * PIVOT_PART * largest) pivot++
+  return pivot
+}

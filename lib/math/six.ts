@@ -1,10 +1,11 @@
 /** J·Jᵀ + λ²·I = L·D·Lᵀ of a row-major 6 x n matrix J, written out: a task of six components is what nearly everyone asks, and a loop over
- *  six costs twice the time. All of it goes through the square of J, whose rounding grows with the square of J's condition; each solution
- *  is therefore corrected by its residual, which is taken through J itself (corrected semi-normal equations, Björck 1987, from memory). */
+ *  six costs twice the time. All of it goes through the square of J, whose rounding grows with the square of J's condition; where that
+ *  is felt a solution is corrected by its residual, which is taken through J itself (corrected semi-normal equations, Björck 1987, from
+ *  memory). */
 export interface SixFactors {
   /** lᵢₖ by rows (15), then 1/dₖ (6). */
   readonly parts: Float64Array
-  /** λ², the trace of J·Jᵀ, and that of (J·Jᵀ + λ²·I)⁻¹. */
+  /** λ², the trace of J·Jᵀ, and, where asked for, that of (J·Jᵀ + λ²·I)⁻¹. */
   readonly sizes: Float64Array
   /** 6 numbers that are left over of a right hand side. */
   readonly rest: Float64Array
@@ -66,31 +67,8 @@ export function factorSix(j: Float64Array, n: number, squared: number, { parts, 
   const e5 = 1 / (a55 + squared - l51 * u51 - l52 * u52 - l53 * u53 - l54 * u54)
   const u65 = a65 - l61 * u51 - l62 * u52 - l63 * u53 - l64 * u54, l65 = u65 * e5
   const e6 = 1 / (a66 + squared - l61 * u61 - l62 * u62 - l63 * u63 - l64 * u64 - l65 * u65)
-  // mᵢₖ: the inverse of L.
-  const m21 = -l21
-  const m31 = -l31 - l32 * m21
-  const m32 = -l32
-  const m41 = -l41 - l42 * m21 - l43 * m31
-  const m42 = -l42 - l43 * m32
-  const m43 = -l43
-  const m51 = -l51 - l52 * m21 - l53 * m31 - l54 * m41
-  const m52 = -l52 - l53 * m32 - l54 * m42
-  const m53 = -l53 - l54 * m43
-  const m54 = -l54
-  const m61 = -l61 - l62 * m21 - l63 * m31 - l64 * m41 - l65 * m51
-  const m62 = -l62 - l63 * m32 - l64 * m42 - l65 * m52
-  const m63 = -l63 - l64 * m43 - l65 * m53
-  const m64 = -l64 - l65 * m54
-  const m65 = -l65
   sizes[0] = squared
   sizes[1] = a11 + a22 + a33 + a44 + a55 + a66
-  sizes[2] =
-    e1 * (1) +
-    e2 * (1 + m21 * m21) +
-    e3 * (1 + m31 * m31 + m32 * m32) +
-    e4 * (1 + m41 * m41 + m42 * m42 + m43 * m43) +
-    e5 * (1 + m51 * m51 + m52 * m52 + m53 * m53 + m54 * m54) +
-    e6 * (1 + m61 * m61 + m62 * m62 + m63 * m63 + m64 * m64 + m65 * m65)
   parts[0] = l21
   parts[1] = l31
   parts[2] = l32
@@ -114,13 +92,45 @@ export function factorSix(j: Float64Array, n: number, squared: number, { parts, 
   parts[20] = e6
 }
 
-/** rates = Jᵀ·(J·Jᵀ + λ²·I)⁻¹·b for 6 numbers b, with one correction. */
-export function solveSix(j: Float64Array, n: number, factors: SixFactors, b: Float64Array, rates: Float64Array): void {
+/** Fills the trace of (J·Jᵀ + λ²·I)⁻¹, which is at least its norm and at most six times that. */
+export function fillInverseTrace({ parts, sizes }: SixFactors): void {
+  const l21 = parts[0]!
+  const l31 = parts[1]!, l32 = parts[2]!
+  const l41 = parts[3]!, l42 = parts[4]!, l43 = parts[5]!
+  const l51 = parts[6]!, l52 = parts[7]!, l53 = parts[8]!, l54 = parts[9]!
+  const l61 = parts[10]!, l62 = parts[11]!, l63 = parts[12]!, l64 = parts[13]!, l65 = parts[14]!
+  // mᵢₖ: the inverse of L.
+  const m21 = -l21
+  const m31 = -l31 - l32 * m21
+  const m32 = -l32
+  const m41 = -l41 - l42 * m21 - l43 * m31
+  const m42 = -l42 - l43 * m32
+  const m43 = -l43
+  const m51 = -l51 - l52 * m21 - l53 * m31 - l54 * m41
+  const m52 = -l52 - l53 * m32 - l54 * m42
+  const m53 = -l53 - l54 * m43
+  const m54 = -l54
+  const m61 = -l61 - l62 * m21 - l63 * m31 - l64 * m41 - l65 * m51
+  const m62 = -l62 - l63 * m32 - l64 * m42 - l65 * m52
+  const m63 = -l63 - l64 * m43 - l65 * m53
+  const m64 = -l64 - l65 * m54
+  const m65 = -l65
+  sizes[2] =
+    parts[15]! +
+    parts[16]! * (1 + m21 * m21) +
+    parts[17]! * (1 + m31 * m31 + m32 * m32) +
+    parts[18]! * (1 + m41 * m41 + m42 * m42 + m43 * m43) +
+    parts[19]! * (1 + m51 * m51 + m52 * m52 + m53 * m53 + m54 * m54) +
+    parts[20]! * (1 + m61 * m61 + m62 * m62 + m63 * m63 + m64 * m64 + m65 * m65)
+}
+
+/** rates = Jᵀ·(J·Jᵀ + λ²·I)⁻¹·b for 6 numbers b, with `corrections` of it. */
+export function solveSix(j: Float64Array, n: number, factors: SixFactors, b: Float64Array, rates: Float64Array, corrections: number): void {
   const { rest, sizes } = factors
   const squared = sizes[0]!
   let y1 = 0, y2 = 0, y3 = 0, y4 = 0, y5 = 0, y6 = 0
   for (let i = 0; i < 6; i++) rest[i] = b[i]!
-  for (let pass = 0; pass < 2; pass++) {
+  for (let left = corrections; ; left--) {
     backSix(factors)
     y1 += rest[0]!
     y2 += rest[1]!
@@ -128,12 +138,17 @@ export function solveSix(j: Float64Array, n: number, factors: SixFactors, b: Flo
     y4 += rest[3]!
     y5 += rest[4]!
     y6 += rest[5]!
+    if (left === 0) {
+      for (let c = 0; c < n; c++) {
+        rates[c] = j[c]! * y1 + j[n + c]! * y2 + j[2 * n + c]! * y3 + j[3 * n + c]! * y4 + j[4 * n + c]! * y5 + j[5 * n + c]! * y6
+      }
+      return
+    }
     // What is left: b − λ²·y − J·Jᵀ·y.
     let r1 = b[0]! - squared * y1, r2 = b[1]! - squared * y2, r3 = b[2]! - squared * y3, r4 = b[3]! - squared * y4, r5 = b[4]! - squared * y5, r6 = b[5]! - squared * y6
     for (let c = 0; c < n; c++) {
       const j1 = j[c]!, j2 = j[n + c]!, j3 = j[2 * n + c]!, j4 = j[3 * n + c]!, j5 = j[4 * n + c]!, j6 = j[5 * n + c]!
       const rate = j1 * y1 + j2 * y2 + j3 * y3 + j4 * y4 + j5 * y5 + j6 * y6
-      rates[c] = rate
       r1 -= j1 * rate
       r2 -= j2 * rate
       r3 -= j3 * rate
@@ -150,10 +165,10 @@ export function solveSix(j: Float64Array, n: number, factors: SixFactors, b: Flo
   }
 }
 
-/** vector = (I − Jᵀ·(J·Jᵀ)⁻¹·J)·vector for factors with λ = 0; the second pass takes out what rounding leaves of the first. */
-export function projectSix(j: Float64Array, n: number, factors: SixFactors, vector: Float64Array): void {
+/** vector = (I − Jᵀ·(J·Jᵀ)⁻¹·J)·vector for factors with λ = 0, and `corrections` times again, which takes out what rounding has left. */
+export function projectSix(j: Float64Array, n: number, factors: SixFactors, vector: Float64Array, corrections: number): void {
   const { rest } = factors
-  for (let pass = 0; pass < 2; pass++) {
+  for (let pass = 0; pass <= corrections; pass++) {
     let r1 = 0, r2 = 0, r3 = 0, r4 = 0, r5 = 0, r6 = 0
     for (let c = 0; c < n; c++) {
       const part = vector[c]!

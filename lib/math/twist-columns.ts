@@ -1,30 +1,39 @@
+import { AXIS_SIZE } from './place-axes'
+
 /** Twists as columns of a 6 x n row-major matrix: linear rows vx, vy, vz, then wx, wy, wz. */
 
-/** Fills the 6 x n matrix `out` with a column for each of n frames: the twist that turning about its z axis gives the origin of `point`
- *  (a transform), v = z × (p − o), w = z, or the one that sliding along it gives, v = z, w = 0, all in the axes that both are given in. */
-export function fillColumns(frames: Float64Array, rotary: Uint8Array, point: Float64Array, n: number, out: Float64Array): void {
+/** Fills the 6 x n matrix `out` with a column for each of n axes (see placeAxes): the twist that turning about it gives the origin of `point`
+ *  (a transform), v = z × (p − o), w = z, or the one that sliding along it gives, v = z, w = 0, all in the frame that both are given in. */
+export function fillColumns(axes: Float64Array, rotary: Uint8Array, point: Float64Array, n: number, out: Float64Array): void {
   const px = point[3]!, py = point[7]!, pz = point[11]!
   for (let i = 0; i < n; i++) {
-    const at = 12 * i
-    const z1 = frames[at + 2]!, z2 = frames[at + 6]!, z3 = frames[at + 10]!
-    const turning = rotary[i] === 1
-    const x = px - frames[at + 3]!, y = py - frames[at + 7]!, z = pz - frames[at + 11]!
-    out[i] = turning ? z2 * z - z3 * y : z1
-    out[n + i] = turning ? z3 * x - z1 * z : z2
-    out[2 * n + i] = turning ? z1 * y - z2 * x : z3
-    out[3 * n + i] = turning ? z1 : 0
-    out[4 * n + i] = turning ? z2 : 0
-    out[5 * n + i] = turning ? z3 : 0
+    const at = AXIS_SIZE * i
+    const z1 = axes[at]!, z2 = axes[at + 1]!, z3 = axes[at + 2]!
+    if (rotary[i] === 1) {
+      const x = px - axes[at + 3]!, y = py - axes[at + 4]!, z = pz - axes[at + 5]!
+      out[i] = z2 * z - z3 * y
+      out[n + i] = z3 * x - z1 * z
+      out[2 * n + i] = z1 * y - z2 * x
+      out[3 * n + i] = z1
+      out[4 * n + i] = z2
+      out[5 * n + i] = z3
+    } else {
+      out[i] = z1
+      out[n + i] = z2
+      out[2 * n + i] = z3
+      out[3 * n + i] = 0
+      out[4 * n + i] = 0
+      out[5 * n + i] = 0
+    }
   }
 }
 
-/** Adds `weight` times the twist that turning about the z axis of the frame at `at` gives the origin of `point` (a transform):
- *  v = z × (p − o), w = z, all in the axes that both are given in. */
+/** Adds `weight` times the twist that turning about the axis at `at` gives the origin of `point` (a transform): v = z × (p − o), w = z. */
 export function addTurning(
-  frames: Float64Array, at: number, point: Float64Array, weight: number, out: Float64Array, columns: number, column: number,
+  axes: Float64Array, at: number, point: Float64Array, weight: number, out: Float64Array, columns: number, column: number,
 ): void {
-  const z1 = weight * frames[at + 2]!, z2 = weight * frames[at + 6]!, z3 = weight * frames[at + 10]!
-  const x = point[3]! - frames[at + 3]!, y = point[7]! - frames[at + 7]!, z = point[11]! - frames[at + 11]!
+  const z1 = weight * axes[at]!, z2 = weight * axes[at + 1]!, z3 = weight * axes[at + 2]!
+  const x = point[3]! - axes[at + 3]!, y = point[7]! - axes[at + 4]!, z = point[11]! - axes[at + 5]!
   out[column]! += z2 * z - z3 * y
   out[columns + column]! += z3 * x - z1 * z
   out[2 * columns + column]! += z1 * y - z2 * x
@@ -33,11 +42,11 @@ export function addTurning(
   out[5 * columns + column]! += z3
 }
 
-/** Adds `weight` times the twist of sliding along the z axis of the frame at `at`: v = z, w = 0. */
-export function addSliding(frames: Float64Array, at: number, weight: number, out: Float64Array, columns: number, column: number): void {
-  out[column]! += weight * frames[at + 2]!
-  out[columns + column]! += weight * frames[at + 6]!
-  out[2 * columns + column]! += weight * frames[at + 10]!
+/** Adds `weight` times the twist of sliding along the axis at `at`: v = z, w = 0. */
+export function addSliding(axes: Float64Array, at: number, weight: number, out: Float64Array, columns: number, column: number): void {
+  out[column]! += weight * axes[at]!
+  out[columns + column]! += weight * axes[at + 1]!
+  out[2 * columns + column]! += weight * axes[at + 2]!
 }
 
 /** out = the same twists in the axes of `frame`: both blocks multiplied by Rᵀ of that transform. `out` may be `twists`. */
@@ -62,4 +71,25 @@ export function turnOutOfFrame(frame: ArrayLike<number>, twists: Float64Array | 
       twists[column + 2 * columns] = frame[8]! * x + frame[9]! * y + frame[10]! * z
     }
   }
+}
+
+/** twist (6) = J·rates of a row-major 6 x n matrix, all six sums at once. */
+export function fillTwist(j: Float64Array, rates: Float64Array, twist: Float64Array): void {
+  const n = rates.length
+  let vx = 0, vy = 0, vz = 0, wx = 0, wy = 0, wz = 0
+  for (let c = 0; c < n; c++) {
+    const rate = rates[c]!
+    vx += j[c]! * rate
+    vy += j[n + c]! * rate
+    vz += j[2 * n + c]! * rate
+    wx += j[3 * n + c]! * rate
+    wy += j[4 * n + c]! * rate
+    wz += j[5 * n + c]! * rate
+  }
+  twist[0] = vx
+  twist[1] = vy
+  twist[2] = vz
+  twist[3] = wx
+  twist[4] = wy
+  twist[5] = wz
 }

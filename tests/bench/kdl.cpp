@@ -91,7 +91,10 @@ int main() {
     } else {
       double kept = 0;
       auto start = std::chrono::steady_clock::now();
-      for (unsigned i = 0; i < count; i++) kept += solvers->ask(word, configurations[i % configurations.size()]);
+      for (unsigned i = 0, at = 0; i < count; i++) {
+        kept += solvers->ask(word, configurations[at]);
+        if (++at == configurations.size()) at = 0;
+      }
       std::chrono::duration<double, std::nano> took = std::chrono::steady_clock::now() - start;
       std::cout << took.count() / count << " " << kept << std::endl;
     }

@@ -1,5 +1,9 @@
 import { describe, expect, it } from 'vitest'
-import { canonicalBasis } from '@/lib/math/canonical-basis'
+import { bidiagonalise, createBidiagonal, fillNullRows } from '@/lib/math/bidiagonal'
+import { canonicalBasis, createBasisRoom, makeCanonical } from '@/lib/math/canonical-basis'
+import { createSingularValues, decompose } from '@/lib/math/singular-values'
+import { numbers } from '../kinematics/arms'
+import { expectClose } from '../kinematics/expect-close'
 
 describe('canonicalBasis', () => {
   it('gives the coordinate axes, in order, where nothing is taken', () => {
@@ -32,5 +36,23 @@ describe('canonicalBasis', () => {
     expect(first[0]).toBeCloseTo(Math.sqrt(2 / 3), 15)
     expect(second[1]).toBeCloseTo(Math.SQRT1_2, 15)
     expect(second[2]).toBeCloseTo(-Math.SQRT1_2, 15)
+  })
+
+  it('is the same by either way: from the rows that are taken, and from rows of what is left', () => {
+    const random = numbers(77)
+    for (let round = 0; round < 300; round++) {
+      const m = 1 + (round % 6)
+      const n = m + 1 + (Math.floor(round / 6) % m)
+      const a = Float64Array.from({ length: m * n }, () => 2 * random() - 1)
+      const taken = createSingularValues(m, n)
+      decompose(a, m, n, taken)
+      const form = createBidiagonal(n)
+      bidiagonalise(a, m, n, form)
+      const left = new Float64Array((n - m) * n)
+      fillNullRows(form, left)
+      const out = new Float64Array((n - m) * n)
+      makeCanonical(left, n, n - m, createBasisRoom(n, m), out)
+      expectClose(out, canonicalBasis(taken.right, n, m).flat(), 1e-12)
+    }
   })
 })

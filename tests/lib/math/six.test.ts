@@ -1,6 +1,6 @@
 import { Matrix, SingularValueDecomposition } from 'ml-matrix'
 import { describe, expect, it } from 'vitest'
-import { createSixFactors, factorSix, projectSix, solveSix } from '@/lib/math/six'
+import { createSixFactors, factorSix, fillInverseTrace, projectSix, solveSix } from '@/lib/math/six'
 import { numbers } from '../kinematics/arms'
 import { expectClose } from '../kinematics/expect-close'
 
@@ -30,11 +30,12 @@ describe('the written-out way of six components', () => {
       const factors = createSixFactors()
       const rates = new Float64Array(n)
       factorSix(Float64Array.from(j), n, lambda * lambda, factors)
-      solveSix(Float64Array.from(j), n, factors, Float64Array.from(b), rates)
+      solveSix(Float64Array.from(j), n, factors, Float64Array.from(b), rates, 1)
       const gains = diagonal.map((value) => value / (value * value + lambda * lambda))
       const witness = rightSingularVectors.mmul(Matrix.diag(gains)).mmul(leftSingularVectors.transpose()).mmul(Matrix.columnVector(b)).to1DArray()
       const size = Math.max(1, ...witness.map(Math.abs))
       expectClose(rates, witness, (1e-14 * diagonal[0]! * size) / Math.min(1, Math.max(diagonal[5]!, lambda)))
+      fillInverseTrace(factors)
       const least = 1 / Math.sqrt(factors.sizes[2]!) - lambda
       expect(least).toBeLessThanOrEqual(diagonal[5]! * (1 + 1e-6))
       expect(factors.sizes[1]).toBeCloseTo(diagonal.reduce((sum, value) => sum + value * value, 0), 9)
@@ -50,11 +51,11 @@ describe('the written-out way of six components', () => {
       const whole = Float64Array.from(j)
       factorSix(whole, n, 0, factors)
       const once = Float64Array.from(z)
-      projectSix(whole, n, factors, once)
+      projectSix(whole, n, factors, once, 1)
       const felt = Array.from({ length: 6 }, (_row, i) => once.reduce((sum, part, c) => sum + part * j[i * n + c]!, 0))
       expectClose(felt, [0, 0, 0, 0, 0, 0], 1e-13)
       const twice = once.slice()
-      projectSix(whole, n, factors, twice)
+      projectSix(whole, n, factors, twice, 1)
       expectClose(twice, once, 1e-12)
     }
   })
@@ -64,6 +65,7 @@ describe('the written-out way of six components', () => {
     const j = Float64Array.from([...row, ...row, ...Array.from({ length: 28 }, (_unused, i) => Math.sin(i))])
     const factors = createSixFactors()
     factorSix(j, 7, 0, factors)
+    fillInverseTrace(factors)
     expect(factors.sizes[2]! > 0 && factors.sizes[1]! * factors.sizes[2]! < 1e8).toBe(false)
   })
 })
