@@ -19,7 +19,7 @@ export interface Workspace {
   readonly prepared: PreparedChain
   /** The configuration of the pose: n (rad or m). */
   readonly q: Float64Array
-  /** What each motion turns by (rad), the sine and cosine of that, and what it slides by (m). */
+  /** What each motion turns by (rad), the sine and cosine of that, and what it slides by (m; none where nothing slides). */
   readonly angles: Float64Array
   readonly turns: Float64Array
   readonly slides: Float64Array
@@ -97,7 +97,7 @@ export function createWorkspace(chain: Chain): Workspace {
     q: new Float64Array(n),
     angles: prepared.rest.slice(),
     turns: new Float64Array(2 * chain.motions.length),
-    slides: new Float64Array(chain.motions.length),
+    slides: new Float64Array(chain.motions.every(({ rotary }) => rotary) ? 0 : chain.motions.length),
     motionAxes: placed.subarray(FIRST_AXIS),
     baseFromTip,
     placed,

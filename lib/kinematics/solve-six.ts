@@ -1,5 +1,5 @@
 import { norm } from '@/lib/math/norm'
-import { factorSix, fillInverseTrace, projectSix, solveSix } from '@/lib/math/six'
+import { factorSix, fillInverseTrace, projectSix, solveAndProjectSix, solveSix } from '@/lib/math/six'
 import type { Workspace } from './create-workspace'
 import { rankTolerance, undampedFrom, type Inverse } from './inverse'
 import { fillWish, needSingularValues, type Objective } from './objectives'
@@ -40,18 +40,22 @@ export function solveSixOnly(
     }
   }
   const corrections = spread < WIDE ? 0 : 1
-  solveSix(j, n, six, work.asked, work.primary, corrections)
   solved.easy = !damped
   solved.rank = damped ? 0 : TWIST_SIZE
   solved.damping = damped ? inverse.damping : 0
   solved.wished = 0
   if (secondary.length === 0) {
+    solveSix(j, n, six, work.asked, work.primary, corrections)
     for (let k = 0; k < n; k++) work.secondary[k] = 0
     return true
   }
   fillWish(work, task, TWIST_SIZE, secondary, work.secondary)
   solved.wished = norm(work.secondary)
-  projectSix(j, n, six, work.secondary, corrections)
+  if (corrections === 0) solveAndProjectSix(j, n, six, work.asked, work.primary, work.secondary)
+  else {
+    solveSix(j, n, six, work.asked, work.primary, corrections)
+    projectSix(j, n, six, work.secondary, corrections)
+  }
   zeroRounding(work.secondary, solved.wished)
   return true
 }

@@ -1,4 +1,4 @@
-import { bidiagonalise, fillNullRows, solveBidiagonal } from '@/lib/math/bidiagonal'
+import { bidiagonalise, solveBidiagonal } from '@/lib/math/bidiagonal'
 import { bidiagonalValues } from '@/lib/math/bidiagonal-values'
 import { numericalRank } from '@/lib/math/numerical-rank'
 import type { Workspace } from './create-workspace'
@@ -18,9 +18,7 @@ export function solveWhole(work: Workspace, j: Float64Array, m: number, inverse:
   if (!bidiagonalValues(bidiagonal.diagonal, bidiagonal.beside, m, work.valuesRoom, values)) return false
   // Written so that a number that is not finite is not easy.
   if (!(values[m - 1]! >= Math.max(floor, SMALLEST) && numericalRank(values, m, rankTolerance(inverse), n) === m)) return false
-  for (let k = 0; k < m; k++) work.byRow[k] = work.asked[k]!
-  solveBidiagonal(bidiagonal, work.byRow, work.primary)
-  fillNullRows(bidiagonal, work.nullRows)
+  solveBidiagonal(bidiagonal, work.asked, work.primary, work.nullRows)
   solved.easy = true
   solved.jacobian = j
   solved.nullRows = work.nullRows

@@ -19,6 +19,8 @@ export interface Bidiagonal {
   /** m, and beside it below: B. */
   readonly diagonal: Float64Array
   readonly beside: Float64Array
+  /** A right hand side, with zeros below it. */
+  readonly side: Float64Array
 }
 
 /** Room for up to 6 x n. */
@@ -32,6 +34,7 @@ export function createBidiagonal(n: number): Bidiagonal {
     rightScales: perRow(),
     diagonal: perRow(),
     beside: perRow(),
+    side: new Float64Array(STRIDE),
   }
 }
 
@@ -118,34 +121,37 @@ function reflectBoth({ vectors: a, diagonal, beside, leftScales, rightScales }: 
   }
 }
 
-/** The least x (n) with A·x = b (m), for A of full rank; `b` is overwritten. */
-export function solveBidiagonal(of: Bidiagonal, b: Float64Array, x: Float64Array): void {
-  const { rows: m, columns: n, vectors, leftScales, diagonal, beside } = of
+/** The least x (n) with A·x = b (m), for A of full rank, and in `nulls` n − m rows of n numbers, orthonormal to each other and to the rows
+ *  of A. */
+export function solveBidiagonal(of: Bidiagonal, b: Float64Array, x: Float64Array, nulls: Float64Array): void {
+  const { rows: m, columns: n, vectors, leftScales, diagonal, beside, side } = of
+  for (let k = 0; k < m; k++) side[k] = b[k]!
+  for (let k = m; k < STRIDE; k++) side[k] = 0
   for (let k = 0; k < m - 2; k++) {
-    const corner = STRIDE * k
-    let sum = 0
-    for (let i = k + 1; i < m; i++) sum += vectors[corner + i]! * b[i]!
-    sum *= leftScales[k]!
-    for (let i = k + 1; i < m; i++) b[i]! -= sum * vectors[corner + i]!
+    const below = STRIDE * k + k + 1
+    const v1 = vectors[below]!, v2 = vectors[below + 1]!, v3 = vectors[below + 2]!, v4 = vectors[below + 3]!, v5 = vectors[below + 4]!
+    const b1 = side[k + 1]!, b2 = side[k + 2]!, b3 = side[k + 3]!, b4 = side[k + 4]!, b5 = side[k + 5]!
+    const part = leftScales[k]! * (v1 * b1 + v2 * b2 + (v3 * b3 + v4 * b4 + v5 * b5))
+    side[k + 1] = b1 - part * v1
+    side[k + 2] = b2 - part * v2
+    side[k + 3] = b3 - part * v3
+    side[k + 4] = b4 - part * v4
+    side[k + 5] = b5 - part * v5
   }
   let before = 0
   for (let k = 0; k < m; k++) {
-    before = (b[k]! - before) / diagonal[k]!
+    before = (side[k]! - before) / diagonal[k]!
     x[k] = before
     before *= beside[k]!
   }
-  for (let k = m; k < n; k++) x[k] = 0
-  turnBack(of, x, 0)
-}
-
-/** Fills n − m rows of n numbers of `out`, orthonormal to each other and to the rows of A. */
-export function fillNullRows(of: Bidiagonal, out: Float64Array): void {
-  const { rows: m, columns: n } = of
+  for (let c = m; c < n; c++) x[c] = 0
   for (let k = m; k < n; k++) {
     const at = (k - m) * n
-    for (let c = 0; c < n; c++) out[at + c] = c === k ? 1 : 0
-    turnBack(of, out, at)
+    for (let c = 0; c < n; c++) nulls[at + c] = c === k ? 1 : 0
+    if (k > m) turnBack(of, nulls, at)
   }
+  if (n > m) turnBothBack(of, x, nulls)
+  else turnBack(of, x, 0)
 }
 
 /** V times the n numbers of `x` from `at` on, in place. */
@@ -155,5 +161,24 @@ function turnBack({ rows: m, columns: n, vectors, rightScales }: Bidiagonal, x: 
     for (let c = k, entry = STRIDE * k + k; c < n; c++, entry += STRIDE) sum += vectors[entry]! * x[at + c]!
     sum *= rightScales[k]!
     for (let c = k, entry = STRIDE * k + k; c < n; c++, entry += STRIDE) x[at + c]! -= sum * vectors[entry]!
+  }
+}
+
+/** V times the first n numbers of `x`, and of `y`, in place: what everyone needs, and in one go hardly dearer than one of them. */
+function turnBothBack({ rows: m, columns: n, vectors, rightScales }: Bidiagonal, x: Float64Array, y: Float64Array): void {
+  for (let k = m - 1; k >= 0; k--) {
+    let sumX = 0, sumY = 0
+    for (let c = k, entry = STRIDE * k + k; c < n; c++, entry += STRIDE) {
+      const v = vectors[entry]!
+      sumX += v * x[c]!
+      sumY += v * y[c]!
+    }
+    sumX *= rightScales[k]!
+    sumY *= rightScales[k]!
+    for (let c = k, entry = STRIDE * k + k; c < n; c++, entry += STRIDE) {
+      const v = vectors[entry]!
+      x[c]! -= sumX * v
+      y[c]! -= sumY * v
+    }
   }
 }

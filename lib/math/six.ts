@@ -7,13 +7,13 @@ export interface SixFactors {
   readonly parts: Float64Array
   /** λ², the trace of J·Jᵀ, and, where asked for, that of (J·Jᵀ + λ²·I)⁻¹. */
   readonly sizes: Float64Array
-  /** 6 numbers that are left over of a right hand side. */
+  /** What is left over of two right hand sides, 6 numbers each. */
   readonly rest: Float64Array
 }
 
 /** Room for the factors. */
 export function createSixFactors(): SixFactors {
-  return { parts: new Float64Array(21), sizes: new Float64Array(3), rest: new Float64Array(6) }
+  return { parts: new Float64Array(21), sizes: new Float64Array(3), rest: new Float64Array(12) }
 }
 
 /** Fills the factors of J·Jᵀ + λ²·I; `squared` is λ². What is not positive makes them not finite. */
@@ -131,7 +131,7 @@ export function solveSix(j: Float64Array, n: number, factors: SixFactors, b: Flo
   let y1 = 0, y2 = 0, y3 = 0, y4 = 0, y5 = 0, y6 = 0
   for (let i = 0; i < 6; i++) rest[i] = b[i]!
   for (let left = corrections; ; left--) {
-    backSix(factors)
+    backSix(factors, 0)
     y1 += rest[0]!
     y2 += rest[1]!
     y3 += rest[2]!
@@ -185,7 +185,7 @@ export function projectSix(j: Float64Array, n: number, factors: SixFactors, vect
     rest[3] = r4
     rest[4] = r5
     rest[5] = r6
-    backSix(factors)
+    backSix(factors, 0)
     const y1 = rest[0]!, y2 = rest[1]!, y3 = rest[2]!, y4 = rest[3]!, y5 = rest[4]!, y6 = rest[5]!
     for (let c = 0; c < n; c++) {
       const j1 = j[c]!, j2 = j[n + c]!, j3 = j[2 * n + c]!, j4 = j[3 * n + c]!, j5 = j[4 * n + c]!, j6 = j[5 * n + c]!
@@ -194,29 +194,60 @@ export function projectSix(j: Float64Array, n: number, factors: SixFactors, vect
   }
 }
 
-/** rest = (L·D·Lᵀ)⁻¹·rest. */
-function backSix({ parts, rest }: SixFactors): void {
+/** Both of that without corrections, at once: rates = Jᵀ·(J·Jᵀ)⁻¹·b, and `vector` projected. */
+export function solveAndProjectSix(j: Float64Array, n: number, factors: SixFactors, b: Float64Array, rates: Float64Array, vector: Float64Array): void {
+  const { rest } = factors
+  let r1 = 0, r2 = 0, r3 = 0, r4 = 0, r5 = 0, r6 = 0
+  for (let c = 0; c < n; c++) {
+    const part = vector[c]!
+    r1 += j[c]! * part
+    r2 += j[n + c]! * part
+    r3 += j[2 * n + c]! * part
+    r4 += j[3 * n + c]! * part
+    r5 += j[4 * n + c]! * part
+    r6 += j[5 * n + c]! * part
+  }
+  for (let i = 0; i < 6; i++) rest[i] = b[i]!
+  rest[6] = r1
+  rest[7] = r2
+  rest[8] = r3
+  rest[9] = r4
+  rest[10] = r5
+  rest[11] = r6
+  backSix(factors, 0)
+  backSix(factors, 6)
+  const y1 = rest[0]!, y2 = rest[1]!, y3 = rest[2]!, y4 = rest[3]!, y5 = rest[4]!, y6 = rest[5]!
+  const z1 = rest[6]!, z2 = rest[7]!, z3 = rest[8]!, z4 = rest[9]!, z5 = rest[10]!, z6 = rest[11]!
+  for (let c = 0; c < n; c++) {
+    const j1 = j[c]!, j2 = j[n + c]!, j3 = j[2 * n + c]!, j4 = j[3 * n + c]!, j5 = j[4 * n + c]!, j6 = j[5 * n + c]!
+    rates[c] = j1 * y1 + j2 * y2 + j3 * y3 + j4 * y4 + j5 * y5 + j6 * y6
+    vector[c]! -= j1 * z1 + j2 * z2 + j3 * z3 + j4 * z4 + j5 * z5 + j6 * z6
+  }
+}
+
+/** rest = (L·D·Lᵀ)⁻¹·rest, of the six numbers from `at` on. */
+function backSix({ parts, rest }: SixFactors, at: 0 | 6): void {
   const l21 = parts[0]!
   const l31 = parts[1]!, l32 = parts[2]!
   const l41 = parts[3]!, l42 = parts[4]!, l43 = parts[5]!
   const l51 = parts[6]!, l52 = parts[7]!, l53 = parts[8]!, l54 = parts[9]!
   const l61 = parts[10]!, l62 = parts[11]!, l63 = parts[12]!, l64 = parts[13]!, l65 = parts[14]!
-  const f1 = rest[0]!
-  const f2 = rest[1]! - l21 * f1
-  const f3 = rest[2]! - l31 * f1 - l32 * f2
-  const f4 = rest[3]! - l41 * f1 - l42 * f2 - l43 * f3
-  const f5 = rest[4]! - l51 * f1 - l52 * f2 - l53 * f3 - l54 * f4
-  const f6 = rest[5]! - l61 * f1 - l62 * f2 - l63 * f3 - l64 * f4 - l65 * f5
+  const f1 = rest[at]!
+  const f2 = rest[at + 1]! - l21 * f1
+  const f3 = rest[at + 2]! - l31 * f1 - l32 * f2
+  const f4 = rest[at + 3]! - l41 * f1 - l42 * f2 - l43 * f3
+  const f5 = rest[at + 4]! - l51 * f1 - l52 * f2 - l53 * f3 - l54 * f4
+  const f6 = rest[at + 5]! - l61 * f1 - l62 * f2 - l63 * f3 - l64 * f4 - l65 * f5
   const g6 = f6 * parts[20]!
   const g5 = f5 * parts[19]! - l65 * g6
   const g4 = f4 * parts[18]! - l54 * g5 - l64 * g6
   const g3 = f3 * parts[17]! - l43 * g4 - l53 * g5 - l63 * g6
   const g2 = f2 * parts[16]! - l32 * g3 - l42 * g4 - l52 * g5 - l62 * g6
   const g1 = f1 * parts[15]! - l21 * g2 - l31 * g3 - l41 * g4 - l51 * g5 - l61 * g6
-  rest[0] = g1
-  rest[1] = g2
-  rest[2] = g3
-  rest[3] = g4
-  rest[4] = g5
-  rest[5] = g6
+  rest[at] = g1
+  rest[at + 1] = g2
+  rest[at + 2] = g3
+  rest[at + 3] = g4
+  rest[at + 4] = g5
+  rest[at + 5] = g6
 }

@@ -1,5 +1,3 @@
-import { AXIS_SIZE } from './place-axes'
-
 /** Twists as columns of a 6 x n row-major matrix: linear rows vx, vy, vz, then wx, wy, wz. */
 
 /** Fills the 6 x n matrix `out` with a column for each of n axes (see placeAxes): the twist that turning about it gives the origin of `point`
@@ -7,7 +5,7 @@ import { AXIS_SIZE } from './place-axes'
 export function fillColumns(axes: Float64Array, rotary: Uint8Array, point: Float64Array, n: number, out: Float64Array): void {
   const px = point[3]!, py = point[7]!, pz = point[11]!
   for (let i = 0; i < n; i++) {
-    const at = AXIS_SIZE * i
+    const at = 6 * i
     const z1 = axes[at]!, z2 = axes[at + 1]!, z3 = axes[at + 2]!
     if (rotary[i] === 1) {
       const x = px - axes[at + 3]!, y = py - axes[at + 4]!, z = pz - axes[at + 5]!

@@ -4,6 +4,9 @@ import type { Chain } from '@/lib/kinematics/chain'
 import { DAMPING, POSTURE, TWIST } from './arms'
 import type { Ask } from './ours'
 
+/** What a library offers an answer to. */
+type Answers = Partial<Record<'fk' | 'fk-jacobian' | 'null-space' | 'damped' | 'spare' | 'everything', Ask>>
+
 /** The same questions asked of general-purpose libraries, written the way their manuals suggest. */
 
 const math = create(all ?? {})
@@ -45,7 +48,7 @@ function jacobianOf(chain: Chain, placed: readonly number[][][]): number[][] {
 const wishOf = (q: ArrayLike<number>) => Array.from(q, (value) => POSTURE - value)
 
 /** Answers by mathjs. */
-export function byMathjs(chain: Chain): Record<'fk' | 'fk-jacobian' | 'damped' | 'spare', Ask> {
+export function byMathjs(chain: Chain): Answers {
   const place = (q: Float64Array) => frames(chain, q, (rows) => rows, (a, b) => math.multiply(a, b))
   const squared = math.multiply(DAMPING * DAMPING, math.identity(6)) as never
   return {
@@ -68,12 +71,17 @@ export function byMathjs(chain: Chain): Record<'fk' | 'fk-jacobian' | 'damped' |
 }
 
 /** Answers by ml-matrix. */
-export function byMlMatrix(chain: Chain): Record<'fk' | 'fk-jacobian' | 'damped' | 'spare', Ask> {
+export function byMlMatrix(chain: Chain): Answers {
   const place = (q: Float64Array) => frames(chain, q, (rows) => new Matrix(rows), (a, b) => a.mmul(b)).map((matrix) => matrix.to2DArray())
   const twist = Matrix.columnVector(TWIST)
   return {
     fk: (q) => place(q).at(-1)![0]![3]!,
     'fk-jacobian': (q) => jacobianOf(chain, place(q))[0]![0]!,
+    'null-space': (q) => {
+      const j = new Matrix(jacobianOf(chain, place(q)))
+      const { rightSingularVectors: v, rank } = new SingularValueDecomposition(j, { autoTranspose: true })
+      return Matrix.eye(q.length).sub(v.subMatrix(0, q.length - 1, 0, rank - 1).mmul(v.subMatrix(0, q.length - 1, 0, rank - 1).transpose()))
+    },
     damped: (q) => {
       const { leftSingularVectors: u, rightSingularVectors: v, diagonal } = new SingularValueDecomposition(new Matrix(jacobianOf(chain, place(q))), { autoTranspose: true })
       const gains = diagonal.map((value) => value / (value * value + DAMPING * DAMPING))

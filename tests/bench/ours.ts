@@ -2,6 +2,7 @@ import type { Chain } from '@/lib/kinematics/chain'
 import { createWorkspace } from '@/lib/kinematics/create-workspace'
 import { forwardKinematics } from '@/lib/kinematics/forward-kinematics'
 import { jacobian } from '@/lib/kinematics/jacobian'
+import { nullSpace } from '@/lib/kinematics/null-space'
 import { createNullSpaceRecord, fillNullSpace } from '@/lib/kinematics/null-space-record'
 import { createRateRecord } from '@/lib/kinematics/rate-record'
 import type { RatePolicy } from '@/lib/kinematics/rate-policy'
@@ -10,11 +11,11 @@ import { structuralLoss } from '@/lib/kinematics/structural-loss'
 import { createTask } from '@/lib/kinematics/task'
 import { DAMPING, POSTURE, TWIST } from './arms'
 
-/** One question asked of one configuration; what it returns keeps the work from being optimised away. */
-export type Ask = (q: Float64Array) => number
+/** One question asked of one configuration. */
+export type Ask = (q: Float64Array) => unknown
 
-/** The product's answers, in a loop that keeps its workspace and record. */
-export function ours(chain: Chain): Record<'fk' | 'fk-jacobian' | 'damped' | 'spare' | 'everything', Ask> {
+/** The product's answers, in a loop that keeps its workspace and record: they stand there, so that nothing can be optimised away. */
+export function ours(chain: Chain): Record<'fk' | 'fk-jacobian' | 'null-space' | 'damped' | 'spare' | 'everything', Ask> {
   const work = createWorkspace(chain)
   const record = createRateRecord(chain)
   const space = createNullSpaceRecord(chain)
@@ -27,29 +28,27 @@ export function ours(chain: Chain): Record<'fk' | 'fk-jacobian' | 'damped' | 'sp
     secondary: [{ objective: 'posture', posture: new Float64Array(chain.joints.length).fill(POSTURE), gain: 1 }],
   }
   return {
-    fk: (q) => {
-      forwardKinematics(chain, q, work)
-      return work.baseFromTip[3]!
-    },
+    fk: (q) => forwardKinematics(chain, q, work),
     'fk-jacobian': (q) => {
       forwardKinematics(chain, q, work)
-      return work.baseFromTip[3]! + jacobian(chain, work)[0]!
+      jacobian(chain, work)
+    },
+    'null-space': (q) => {
+      forwardKinematics(chain, q, work)
+      return nullSpace(chain, work, task, common.structural)
     },
     damped: (q) => {
       forwardKinematics(chain, q, work)
       resolveRatesInto(chain, work, TWIST, damped, record, undefined, 'rates')
-      return record.rates[0]!
     },
     spare: (q) => {
       forwardKinematics(chain, q, work)
       resolveRatesInto(chain, work, TWIST, spare, record, undefined, 'rates')
-      return record.rates[0]!
     },
     everything: (q) => {
       forwardKinematics(chain, q, work)
       resolveRatesInto(chain, work, TWIST, spare, record)
       fillNullSpace(work, space)
-      return record.rates[0]! + record.singularValues[5]! + space.basis[0]! + space.projector[0]!
     },
   }
 }

@@ -1,7 +1,6 @@
 import { writeFileSync } from 'node:fs'
 import { benchArm, benchConfigurations } from './arms'
 import { startKdl } from './kdl-child'
-import { byMathjs, byMlMatrix } from './others'
 import { ours, type Ask } from './ours'
 
 /** Time per call, ours beside Orocos KDL, mathjs and ml-matrix, on one core, in turns within one run; ratios of medians.
@@ -26,17 +25,14 @@ function contestant(name: string, time: Contestant['time']): Contestant {
   return { name, time, calls: 1, seen: [] }
 }
 
-let kept = 0
 function inThisProcess(ask: Ask, configurations: readonly Float64Array[]): (count: number) => number {
   return (count) => {
-    let sum = 0
     const start = process.hrtime.bigint()
     for (let i = 0, at = 0; i < count; i++) {
-      sum += ask(configurations[at]!)
+      ask(configurations[at]!)
       if (++at === configurations.length) at = 0
     }
     const took = Number(process.hrtime.bigint() - start)
-    kept += sum
     return took / count
   }
 }
@@ -59,6 +55,7 @@ const QUESTIONS = [
   { key: 'damped', asked: 'FK + Jacobian + damped least squares', kdl: 'damped', target: 0.1 },
   { key: 'spare', asked: 'FK + Jacobian + minimum norm, posture gradient, scaling', kdl: 'spare', target: 0.2 },
   { key: 'everything', asked: 'everything (rates, singular values, rank, basis, projector)', kdl: 'spare', target: 0.5 },
+  { key: 'null-space', asked: 'FK + Jacobian + null space (singular values, rank, basis, lost directions)', kdl: null, target: null },
 ] as const
 const KDL_NAMES = { fk: 'KDL FK', 'fk-jacobian': 'KDL FK + JntToJac', damped: 'KDL FK + ikvel_wdls', spare: 'KDL FK + ikvel_pinv_nso' } as const
 
@@ -80,27 +77,13 @@ if (!hasKdl) process.stdout.write(`Without Orocos KDL: ${kdl.missing}\n`)
 const arm = benchArm(7)
 const configurations = benchConfigurations(7, CONFIGURATIONS)
 const mine = ours(arm)
-const [mathjs, mlMatrix] = [byMathjs(arm), byMlMatrix(arm)]
 if (hasKdl) kdl.load(arm, configurations)
-for (const { key, asked, kdl: question, target } of QUESTIONS) {
+const sevens = new Map<string, Map<string, number>>()
+for (const { key, kdl: question } of QUESTIONS) {
   const contestants = [contestant('ours', inThisProcess(mine[key], configurations))]
-  if (hasKdl) contestants.push(contestant('kdl', (count) => kdl.time(question, count)))
+  if (hasKdl && question !== null) contestants.push(contestant('kdl', (count) => kdl.time(question, count)))
   if (hasKdl && key === 'fk-jacobian') contestants.push(contestant('lean', (count) => kdl.time('lean', count)))
-  const found = await race(contestants)
-  if (key !== 'everything') {
-    // By themselves: what they leave to the garbage collector would be swept in the turn of the next.
-    const others = [contestant('mathjs', inThisProcess(mathjs[key], configurations)), contestant('ml-matrix', inThisProcess(mlMatrix[key], configurations))]
-    for (const [name, time] of await race(others)) found.set(name, time)
-  }
-  const time = found.get('ours')!
-  const ratio = hasKdl ? time / found.get('kdl')! : null
-  lines.push([asked, '7', ns(time), ns(time / 7), ns(found.get('kdl')), ns(found.get('mathjs')), ns(found.get('ml-matrix')), ratio?.toFixed(3) ?? '–', target === null ? '' : `<= ${target}`])
-  if (target !== null) rows.push({ asked, beside: KDL_NAMES[question], ratio, target })
-  if (key === 'fk-jacobian') {
-    const lean = hasKdl ? time / found.get('lean')! : null
-    lines.push([`${asked}, beside lean Eigen -O3`, '7', ns(time), ns(time / 7), ns(found.get('lean')), '', '', lean?.toFixed(3) ?? '–', '<= 1.25'])
-    rows.push({ asked, beside: 'lean fixed-size Eigen, -O3', ratio: lean, target: 1.25 })
-  }
+  sevens.set(key, await race(contestants))
 }
 
 const [ten, hundred] = [benchArm(10), benchArm(100)]
@@ -113,17 +96,40 @@ if (hasKdl) {
   kdl.load(hundred, hundreds)
   long.push(contestant('kdl', (count) => kdl.time('fk-jacobian', count)))
 }
-const found = await race(long)
-const [short, time] = [found.get('ten')!, found.get('hundred')!]
-const ratio = hasKdl ? time / found.get('kdl')! : null
-lines.push(['FK + Jacobian', '100', ns(time), ns(time / 100), ns(found.get('kdl')), '', '', ratio?.toFixed(3) ?? '–', '<= 0.06'])
+const longs = await race(long)
+if (hasKdl) kdl.end()
+
+// Loaded only now, and racing by themselves: that they are there makes every typed array of the process slower by about a fifth, and
+// what they leave to the garbage collector would be swept in the turn of the next.
+const { byMathjs, byMlMatrix } = await import('./others')
+const others = { mathjs: byMathjs(arm), 'ml-matrix': byMlMatrix(arm) }
+for (const { key, asked, kdl: question, target } of QUESTIONS) {
+  const found = sevens.get(key)!
+  const contestants = Object.entries(others).flatMap(([name, answers]) => {
+    const ask = answers[key]
+    return ask === undefined ? [] : [contestant(name, inThisProcess(ask, configurations))]
+  })
+  for (const [name, time] of await race(contestants)) found.set(name, time)
+  const time = found.get('ours')!
+  const ratio = found.has('kdl') ? time / found.get('kdl')! : null
+  lines.push([asked, '7', ns(time), ns(time / 7), ns(found.get('kdl')), ns(found.get('mathjs')), ns(found.get('ml-matrix')), ratio?.toFixed(3) ?? '–', target === null ? '' : `<= ${target}`])
+  if (target !== null) rows.push({ asked, beside: KDL_NAMES[question], ratio, target })
+  if (key === 'fk-jacobian') {
+    const lean = hasKdl ? time / found.get('lean')! : null
+    lines.push([`${asked}, beside lean Eigen -O3`, '7', ns(time), ns(time / 7), ns(found.get('lean')), '', '', lean?.toFixed(3) ?? '–', '<= 1.25'])
+    rows.push({ asked, beside: 'lean fixed-size Eigen, -O3', ratio: lean, target: 1.25 })
+  }
+}
+
+const [short, time] = [longs.get('ten')!, longs.get('hundred')!]
+const ratio = hasKdl ? time / longs.get('kdl')! : null
+lines.push(['FK + Jacobian', '100', ns(time), ns(time / 100), ns(longs.get('kdl')), '', '', ratio?.toFixed(3) ?? '–', '<= 0.06'])
 rows.push({ asked: 'FK + Jacobian at 100 joints', beside: 'KDL FK + JntToJac', ratio, target: 0.06 })
 const growth = time / 100 / (short / 10)
 lines.push(['FK + Jacobian per joint, 100 beside 10', '10', ns(short), ns(short / 10), '', '', '', growth.toFixed(3), '<= 1.15'])
 rows.push({ asked: 'FK + Jacobian per joint, 100 joints against 10', beside: 'itself', ratio: growth, target: 1.15 })
-if (hasKdl) kdl.end()
 
 const widths = lines[0]!.map((_cell, i) => Math.max(...lines.map((line) => line[i]!.length)))
 for (const line of lines) process.stdout.write(`${line.map((cell, i) => (i === 0 ? cell.padEnd(widths[i]!) : cell.padStart(widths[i]!))).join('  ')}\n`)
-process.stdout.write(`\nNanoseconds a call, medians of ${rounds} turns of about a millisecond each, in turns within one run${kept === 0 ? '.' : ''}\n`)
+process.stdout.write(`\nNanoseconds a call, medians of ${rounds} turns of about a millisecond each, in turns within one run\n`)
 if (process.argv.includes('--json')) writeFileSync(argument('--json')!, `${JSON.stringify(rows, null, 2)}\n`)

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest'
-import { bidiagonalise, createBidiagonal, fillNullRows } from '@/lib/math/bidiagonal'
+import { bidiagonalise, createBidiagonal, solveBidiagonal } from '@/lib/math/bidiagonal'
 import { canonicalBasis, createBasisRoom, makeCanonical } from '@/lib/math/canonical-basis'
 import { createSingularValues, decompose } from '@/lib/math/singular-values'
 import { numbers } from '../kinematics/arms'
@@ -49,7 +49,7 @@ describe('canonicalBasis', () => {
       const form = createBidiagonal(n)
       bidiagonalise(a, m, n, form)
       const left = new Float64Array((n - m) * n)
-      fillNullRows(form, left)
+      solveBidiagonal(form, new Float64Array(m), new Float64Array(n), left)
       const out = new Float64Array((n - m) * n)
       makeCanonical(left, n, n - m, createBasisRoom(n, m), out)
       expectClose(out, canonicalBasis(taken.right, n, m).flat(), 1e-12)

@@ -1,6 +1,6 @@
 import { Matrix, SingularValueDecomposition } from 'ml-matrix'
 import { describe, expect, it } from 'vitest'
-import { createSixFactors, factorSix, fillInverseTrace, projectSix, solveSix } from '@/lib/math/six'
+import { createSixFactors, factorSix, fillInverseTrace, projectSix, solveAndProjectSix, solveSix } from '@/lib/math/six'
 import { numbers } from '../kinematics/arms'
 import { expectClose } from '../kinematics/expect-close'
 
@@ -57,6 +57,22 @@ describe('the written-out way of six components', () => {
       const twice = once.slice()
       projectSix(whole, n, factors, twice, 1)
       expectClose(twice, once, 1e-12)
+    }
+  })
+
+  it('does both at once as it does them one by one', () => {
+    for (const seed of SEEDS) {
+      const { n, j, b, z } = question(seed)
+      const factors = createSixFactors()
+      const whole = Float64Array.from(j)
+      factorSix(whole, n, 0, factors)
+      const [rates, rest] = [new Float64Array(n), Float64Array.from(z)]
+      solveSix(whole, n, factors, Float64Array.from(b), rates, 0)
+      projectSix(whole, n, factors, rest, 0)
+      const [bothRates, bothRest] = [new Float64Array(n), Float64Array.from(z)]
+      solveAndProjectSix(whole, n, factors, Float64Array.from(b), bothRates, bothRest)
+      expect(bothRates).toEqual(rates)
+      expect(bothRest).toEqual(rest)
     }
   })
 
