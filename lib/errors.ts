@@ -4,8 +4,8 @@ export const PROBLEMS = {
   'malformed-body': {
     status: 400,
     title: 'The body does not parse',
-    meaning: 'The body is not what its content type says: broken JSON, JSON that is not UTF-8, or broken multipart.',
-    remedy: 'Check the body with a JSON or multipart library before sending; the detail says where reading stopped.',
+    meaning: 'The body is not what its content type says: broken JSON, JSON that is not UTF-8, broken multipart, or bytes that are no whole number of records.',
+    remedy: 'Check the body with a JSON or multipart library before sending; the detail says where reading stopped, or how many bytes a record has.',
   },
   'sign-in-required': {
     status: 401,

@@ -3,6 +3,7 @@ import { z } from 'zod'
 import { PERMISSIONS } from '@/lib/access/permissions'
 import type { Operation } from '@/lib/contract/operation'
 import type { OperationName } from '@/lib/contract/operations'
+import { MOST_QUESTION_BYTES, MOST_RECORDS, type RecordForm } from '@/lib/contract/record-form'
 import { PROBLEMS } from '@/lib/errors'
 import { problemsOf } from './common-problems'
 import { ProblemSchema } from './problem-schema'
@@ -34,24 +35,70 @@ const whoMayCall = (name: OperationName) => {
 const uploadOf = (form: z.ZodObject) =>
   form.extend({ file: z.string().meta({ format: 'binary', description: 'A URDF (.urdf or .xml), at most 8 MiB.' }) })
 
+const BYTES = z.string().meta({ format: 'binary' })
+
+const RECORDS_IN = (form: RecordForm) =>
+  `Little-endian binary64 numbers, at most ${MOST_RECORDS} records. A record holds, by "record" in the question: ` +
+  Object.entries(form.records).map(([name, parts], i) => `${name}${i === 0 ? ' (when left out)' : ''}: ${parts.join(', ')}`).join('; ') +
+  '. See /docs/formats.'
+
+const questionField = ({ question }: RecordForm) =>
+  z.object({
+    question: z.string().optional().meta({
+      maxLength: MOST_QUESTION_BYTES,
+      contentMediaType: 'application/json',
+      description: `Only with a body of records: what stands beside them, as JSON. Fields: ${Object.keys(question.shape).join(', ')}.`,
+      example: '{"units":{"length":"mm"}}',
+    }),
+  })
+
 function requestOf(operation: Operation): NonNullable<RouteConfig['request']> {
-  const { body, form, query } = operation
+  const { body, form, query, records } = operation
   const example = operation.example === undefined ? {} : { example: operation.example }
   return {
     params: parametersOf(operation.path),
     ...(query && { query }),
-    ...(body && { body: { required: true, content: { 'application/json': { schema: body, ...example } } } }),
+    ...(records && { query: questionField(records) }),
+    ...(body && {
+      body: {
+        required: true,
+        content: {
+          'application/json': { schema: body, ...example },
+          ...(records && { 'application/octet-stream': { schema: BYTES.meta({ format: 'binary', description: RECORDS_IN(records) }) } }),
+        },
+      },
+    }),
     ...(form && { body: { required: true, content: { 'multipart/form-data': { schema: uploadOf(form) } } } }),
   }
 }
 
 const SUCCESS = { 200: 'The answer.', 201: 'Made. Location names it.', 204: 'Done; nothing to say.' }
 
-function successOf({ answer }: Operation): RouteConfig['responses'][string] {
+const FIELD = (description: string) => ({ description, schema: { type: 'string' as const } })
+
+/** Fields of a reply of records: what the JSON answer says of the model beside its results. */
+const RECORD_FIELDS = {
+  'Model-Revision': FIELD('CSV and binary: number of the revision, with team, model, status, and how many warnings the JSON answer has.'),
+  'Record-Chain': FIELD('CSV and binary: base, tip and number of joints.'),
+  'Record-Units': FIELD('CSV and binary: length and angle.'),
+  'Record-Layout': FIELD('Binary: the columns of a record, in order.'),
+}
+
+const RECORDS_OUT = {
+  'text/csv': { schema: z.string().meta({ description: 'RFC 4180: a header of JSON paths, then one record a result.' }) },
+  'application/octet-stream': { schema: BYTES.meta({ format: 'binary', description: 'Little-endian binary64 records, laid out as Record-Layout says.' }) },
+}
+
+function successOf({ answer, pinned, records }: Operation): RouteConfig['responses'][string] {
   if (answer.mediaType !== undefined) {
-    return { description: 'The bytes, as an attachment.', content: { [answer.mediaType]: { schema: z.string().meta({ format: 'binary' }) } } }
+    return { description: 'The bytes, as an attachment.', content: { [answer.mediaType]: { schema: BYTES } } }
   }
-  return { description: SUCCESS[answer.status], ...(answer.schema && { content: { 'application/json': { schema: answer.schema } } }) }
+  const headers = { ...(pinned && { 'Model-Fingerprint': FIELD('The fingerprint of the model that the answer was computed from.') }), ...(records && RECORD_FIELDS) }
+  return {
+    description: SUCCESS[answer.status],
+    ...(Object.keys(headers).length > 0 && { headers }),
+    ...(answer.schema && { content: { 'application/json': { schema: answer.schema }, ...(records && RECORDS_OUT) } }),
+  }
 }
 
 /** One response a status, listing the problem types behind it. */

@@ -10,6 +10,7 @@ export const DOCS_PAGES: readonly DocsPageEntry[] = [
   { href: '/docs', title: 'Start here' },
   { href: '/docs/conventions', title: 'Conventions' },
   { href: '/docs/reference', title: 'API reference' },
+  { href: '/docs/formats', title: 'Formats of an answer' },
   { href: '/docs/errors', title: 'Errors', covers: '/docs/problems/' },
   { href: '/docs/findings', title: 'Findings of the importer', covers: '/docs/findings/' },
   { href: '/docs/methods', title: 'Methods and sources' },

@@ -4,6 +4,7 @@ import { findModel, type ModelRow } from '@/db/queries/models'
 import { findMembership } from '@/db/queries/people'
 import { findRevision, type RevisionRow } from '@/db/queries/revisions'
 import { fail } from '@/lib/errors'
+import { passTurn } from '@/lib/in-slices'
 import type { Caller, Identity, Team } from './caller'
 
 /** What stands behind each {parameter} of a path. */
@@ -50,6 +51,7 @@ export async function locate(
   if (model !== undefined) {
     if (!NAME.test(model)) fail('model-not-found')
     at.model = (await findModel(db, caller.team.id, model)) ?? fail('model-not-found')
+    await passTurn()
     if (revision !== undefined) at.revision = await locateRevision(db, at.model, revision)
   }
   if (key !== undefined) {

@@ -1,5 +1,6 @@
 import type { z } from 'zod'
 import type { OperationName, Operations, PathParameters } from '@/lib/contract/operations'
+import type { RecordSizes } from '@/lib/contract/record-columns'
 import type { Caller } from './caller'
 import type { Located, Parameter } from './locate'
 
@@ -17,11 +18,29 @@ export interface Ask<N extends OperationName> {
   readonly body: Parsed<N, 'body'>
   readonly form: Parsed<N, 'form'>
   readonly file: Operations[N] extends { form: z.ZodType } ? UploadedFile : undefined
+  /** Binary records as they came. The body is then what stands beside them: see lib/compute/with-records.ts. */
+  readonly records?: Uint8Array | undefined
 }
 
-/** The JSON that an operation answers. */
+/** Many results, each worked out when the edge takes it, so that none is kept longer than it takes to write it. */
+export interface Series<T> {
+  readonly count: number
+  /** What there is one result for. */
+  readonly of: 'configurations' | 'targets'
+  /** The result fields that were asked for, in the order of the declaration. */
+  readonly fields: readonly string[]
+  readonly sizes: RecordSizes
+  /** How many numbers one result has at the most, for the size of an answer in text. */
+  readonly numbersEach: number
+  /** The results in order; undefined is a pause in which others may have their turn. */
+  readonly steps: () => Generator<T | undefined, void>
+}
+
+/** The JSON that an operation answers; many results as a series. */
 export type AnswerBody<N extends OperationName> = Operations[N]['answer'] extends { schema: infer S extends z.ZodType }
-  ? z.input<S>
+  ? Operations[N] extends { item: infer I extends z.ZodType }
+    ? Omit<z.input<S>, 'results'> & { readonly results: Series<z.input<I>> }
+    : z.input<S>
   : Operations[N]['answer'] extends { mediaType: string }
     ? Uint8Array
     : undefined

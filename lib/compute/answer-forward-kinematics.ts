@@ -4,17 +4,17 @@ import type { ForwardKinematicsResult } from '@/lib/contract/kinematic-answers'
 import { FORWARD_KINEMATICS_FIELDS } from '@/lib/contract/kinematic-questions'
 import type { Pose } from '@/lib/contract/kinematic-quantities'
 import { fail } from '@/lib/errors'
-import { inSlices } from '@/lib/in-slices'
 import type { Chain } from '@/lib/kinematics/chain'
 import { createWorkspace } from '@/lib/kinematics/create-workspace'
 import { forwardKinematics } from '@/lib/kinematics/forward-kinematics'
 import { listViolations } from '@/lib/kinematics/within-limits'
 import { quaternionOf } from '@/lib/math/quaternion'
 import { positionOf } from '@/lib/math/rigid-transform'
-import { begin, checkAnswerSize } from './begin'
-import { includedFields, pick } from './included'
+import { begin, taskOf } from './begin'
+import { includedFields, inOrder, pick } from './included'
 import { chainOf, loadRevision } from './load-chain'
 import { POSITION_KINDS, type SiWriter } from './si'
+import { withRecords } from './with-records'
 
 /** A transform of 12 numbers (m) as a pose of the answer. */
 function presentPose(transform: ArrayLike<number>, write: SiWriter, withMatrix: boolean): Pose {
@@ -42,8 +42,8 @@ const NUMBERS_A_MATRIX = 16
 const NUMBERS_A_VIOLATION = 6
 
 /** Where the tool and further links are at each configuration, and whether the joints are within their limits. */
-export const answerForwardKinematics: UseCase<'forwardKinematics'> = async (caller, { at, body }) => {
-  const { chain, work, configurations, tipFromTool, kinds, read, write, envelope } = await begin(caller, at, body)
+export const answerForwardKinematics: UseCase<'forwardKinematics'> = withRecords('forwardKinematics', async (caller, { at, body }) => {
+  const { chain, work, configurations, tipFromTool, kinds, read, write, sizesOf, envelope } = await begin(caller, at, body)
   read.finish()
   const revision = await loadRevision(at.revision.id)
   const names = body.links ?? []
@@ -55,34 +55,38 @@ export const answerForwardKinematics: UseCase<'forwardKinematics'> = async (call
   const links = names.map((name, i) => followLink(chain, chainOf(revision, { base: chain.base, tip: name }), `/links/${i}`))
 
   const wanted = includedFields(FORWARD_KINEMATICS_FIELDS, body.include)
+  if (body.links === undefined) wanted.delete('links')
   const withMatrix = body.matrices === true
   const poses = (wanted.has('pose') ? 1 : 0) + (wanted.has('links') ? links.length : 0)
   const violations = wanted.has('violations') ? NUMBERS_A_VIOLATION * kinds.length : 0
-  checkAnswerSize(configurations.length, poses * (NUMBERS_A_POSE + (withMatrix ? NUMBERS_A_MATRIX : 0)) + violations)
 
-  const results: z.infer<typeof ForwardKinematicsResult>[] = []
-  await inSlices(configurations.length, (index) => {
-    const q = configurations[index]!
-    forwardKinematics(chain, q, work, tipFromTool)
-    const violations = listViolations(chain, q)
-    results.push(
-      pick<z.infer<typeof ForwardKinematicsResult>>(wanted, {
+  function* steps(): Generator<z.infer<typeof ForwardKinematicsResult>, void> {
+    for (const q of configurations) {
+      forwardKinematics(chain, q, work, tipFromTool)
+      const violations = listViolations(chain, q)
+      yield pick<z.infer<typeof ForwardKinematicsResult>>(wanted, {
         pose: () => presentPose(work.baseFromTool, write, withMatrix),
         links: () =>
-          body.links === undefined
-            ? undefined
-            : links.map(({ chain: link, work: linkWork, places }) => {
-                forwardKinematics(link, places.map((place) => q[place]!), linkWork)
-                return { link: link.tip, pose: presentPose(linkWork.baseFromTip, write, withMatrix) }
-              }),
+          links.map(({ chain: link, work: linkWork, places }) => {
+            forwardKinematics(link, places.map((place) => q[place]!), linkWork)
+            return { link: link.tip, pose: presentPose(linkWork.baseFromTip, write, withMatrix) }
+          }),
         withinLimits: () => violations.length === 0,
         violations: () =>
           violations.map(({ joint, value, lower, upper }) => {
             const kind = kinds[chain.joints.findIndex(({ name }) => name === joint)]!
             return { joint, value: write.number(value, kind), lower: write.nullable(lower, kind), upper: write.nullable(upper, kind) }
           }),
-      }),
-    )
-  })
+      })
+    }
+  }
+  const results = {
+    count: configurations.length,
+    of: 'configurations',
+    fields: inOrder(FORWARD_KINEMATICS_FIELDS, wanted),
+    sizes: sizesOf(taskOf(undefined), { links: links.length, matrices: withMatrix }),
+    numbersEach: poses * (NUMBERS_A_POSE + (withMatrix ? NUMBERS_A_MATRIX : 0)) + violations,
+    steps,
+  } as const
   return { body: { ...envelope, results } }
-}
+})

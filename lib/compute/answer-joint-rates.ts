@@ -3,7 +3,7 @@ import type { UseCase } from '@/lib/access/use-case'
 import type { JointRatesResult } from '@/lib/contract/kinematic-answers'
 import type { Inverse as InverseQuestion } from '@/lib/contract/kinematic-quantities'
 import { JOINT_RATES_FIELDS, type JointRatesQuestion } from '@/lib/contract/kinematic-questions'
-import { finishInSlices, inSlices } from '@/lib/in-slices'
+import { inSlices } from '@/lib/in-slices'
 import { closedLoopTwist, type Reference } from '@/lib/kinematics/closed-loop-twist'
 import { forwardKinematics } from '@/lib/kinematics/forward-kinematics'
 import { DEFAULT_INVERSE, type Inverse, rankTolerance } from '@/lib/kinematics/inverse'
@@ -13,10 +13,12 @@ import type { RatePolicy } from '@/lib/kinematics/rate-policy'
 import { resolveRates } from '@/lib/kinematics/resolve-rates'
 import { structuralLossInSteps } from '@/lib/kinematics/structural-loss'
 import { LINEAR_COMPONENTS, type Task } from '@/lib/kinematics/task'
-import { begin, type Begun, checkAnswerSize, readPose, taskOf } from './begin'
-import { includedFields, pick } from './included'
+import { begin, type Begun, readPose, taskOf } from './begin'
+import { includedFields, inOrder, pick } from './included'
+import { pausing } from './pausing'
 import { readObjectives } from './read-objectives'
 import { type Kind, type SiReader, TWIST_KINDS } from './si'
+import { withRecords } from './with-records'
 
 const DEFAULT_GAIN = 1
 
@@ -68,6 +70,13 @@ const readLimits = (limits: JointRatesQuestion['limits'], { read, kinds }: Begun
 const largestGain = ({ positionGain, orientationGain }: Reference, { rows }: Task): number =>
   Math.max(...rows.map((row) => (row < LINEAR_COMPONENTS ? positionGain : orientationGain)))
 
+/** Every entry of a list, read in slices; none where there is no list. */
+async function readEach<T, R>(list: readonly T[] | undefined, readOne: (entry: T, index: number) => R): Promise<R[]> {
+  const entries: R[] = []
+  await inSlices(list?.length ?? 0, (i) => entries.push(readOne(list![i]!, i)))
+  return entries
+}
+
 /** The n-th of a list that has one entry for each configuration, or one for all. */
 const nth = <T>(list: readonly T[], index: number): T => list[list.length === 1 ? 0 : index]!
 
@@ -77,45 +86,43 @@ const NUMBERS_BESIDE_JOINTS = 6 + 6 + 6 + 22
 const PER_JOINT = [['rates', 1], ['primaryRates', 1], ['secondaryRates', 1], ['saturated', 1], ['diagnosis', 4]] as const
 
 /** Joint rates that move the tool as asked at each configuration, and what became of the wish. */
-export const answerJointRates: UseCase<'jointRates'> = async (caller, { at, body }) => {
+export const answerJointRates: UseCase<'jointRates'> = withRecords('jointRates', async (caller, { at, body }) => {
   const begun = await begin(caller, at, body)
-  const { chain, work, configurations, tipFromTool, kinds, read, write, envelope } = begun
+  const { chain, work, configurations, tipFromTool, kinds, read, write, sizesOf, envelope } = begun
   const count = configurations.length
   const task = taskOf(body.task)
   const inverse = readInverse(body.inverse, read)
   const secondary = readObjectives(body.secondary, begun)
   const limits = readLimits(body.limits, begun)
   const jointWeights = body.jointWeights && read.list(body.jointWeights, kinds.map(() => null), '/jointWeights', 'the chain')
-  const previous = body.limits?.previousRates?.map((rates, i) => read.list(rates, kinds, `/limits/previousRates/${i}`, 'the chain'))
-  if (previous !== undefined) read.matched(previous.length, count, '/limits/previousRates')
-  const twists = body.twists?.map((twist, i) => readTwist(read, twist, `/twists/${i}`)) ?? []
-  const references = body.references?.map((reference, i) => readReference(read, reference, `/references/${i}`)) ?? []
+  const previous = await readEach(body.limits?.previousRates, (rates, i) => read.list(rates, kinds, `/limits/previousRates/${i}`, 'the chain'))
+  const twists = await readEach(body.twists, (twist, i) => readTwist(read, twist, `/twists/${i}`))
+  const references = await readEach(body.references, (reference, i) => readReference(read, reference, `/references/${i}`))
+  if (body.limits?.previousRates !== undefined) read.matched(previous.length, count, '/limits/previousRates')
   if (body.twists !== undefined) read.matched(twists.length, count, '/twists')
   if (body.references !== undefined) read.matched(references.length, count, '/references')
   read.finish()
   const wanted = includedFields(JOINT_RATES_FIELDS, body.include)
   const numbersAJoint = PER_JOINT.reduce((sum, [field, numbers]) => sum + (wanted.has(field) ? numbers : 0), 0)
-  checkAnswerSize(count, NUMBERS_BESIDE_JOINTS + numbersAJoint * kinds.length)
 
-  const policy: RatePolicy = {
-    task,
-    inverse,
-    secondary,
-    limits,
-    ...(jointWeights && { jointWeights }),
-    structural: await finishInSlices(structuralLossInSteps(chain, task, { tolerance: rankTolerance(inverse), ...(tipFromTool && { tipFromTool }) })),
-  }
-  const results: z.infer<typeof JointRatesResult>[] = []
-  await inSlices(count, (index) => {
-    forwardKinematics(chain, configurations[index]!, work, tipFromTool)
-    const twist = body.references === undefined ? nth(twists, index) : closedLoopTwist(work, nth(references, index), task.frame)
-    const reference = body.references && nth(references, index)
-    const outcome = resolveRates(chain, work, twist, policy, {
-      ...(previous && { previousRates: nth(previous, index) }),
-      ...(reference && { gain: largestGain(reference, task) }),
-    })
-    results.push(
-      pick<z.infer<typeof JointRatesResult>>(wanted, {
+  function* steps(): Generator<z.infer<typeof JointRatesResult> | undefined, void> {
+    const policy: RatePolicy = {
+      task,
+      inverse,
+      secondary,
+      limits,
+      ...(jointWeights && { jointWeights }),
+      structural: yield* pausing(structuralLossInSteps(chain, task, { tolerance: rankTolerance(inverse), ...(tipFromTool && { tipFromTool }) })),
+    }
+    for (const [index, q] of configurations.entries()) {
+      forwardKinematics(chain, q, work, tipFromTool)
+      const reference = references.length === 0 ? undefined : nth(references, index)
+      const twist = reference === undefined ? nth(twists, index) : closedLoopTwist(work, reference, task.frame)
+      const outcome = resolveRates(chain, work, twist, policy, {
+        ...(previous.length > 0 && { previousRates: nth(previous, index) }),
+        ...(reference && { gain: largestGain(reference, task) }),
+      })
+      yield pick<z.infer<typeof JointRatesResult>>(wanted, {
         rates: () => write.list(outcome.rates, kinds),
         primaryRates: () => write.list(outcome.primaryRates, kinds),
         secondaryRates: () => write.list(outcome.secondaryRates, kinds),
@@ -137,8 +144,16 @@ export const answerJointRates: UseCase<'jointRates'> = async (caller, { at, body
             ...(direction === undefined ? {} : { direction }),
             ...(joint === undefined ? {} : { joint }),
           })),
-      }),
-    )
-  })
+      })
+    }
+  }
+  const results = {
+    count,
+    of: 'configurations',
+    fields: inOrder(JOINT_RATES_FIELDS, wanted),
+    sizes: sizesOf(task),
+    numbersEach: NUMBERS_BESIDE_JOINTS + numbersAJoint * kinds.length,
+    steps,
+  } as const
   return { body: { ...envelope, results } }
-}
+})

@@ -4,11 +4,11 @@ import type { Located } from '@/lib/access/locate'
 import type { ModelReference } from '@/lib/contract/kinematic-answers'
 import type { PoseQuestion } from '@/lib/contract/kinematic-quantities'
 import type { ForwardKinematicsQuestion } from '@/lib/contract/kinematic-questions'
-import { fail } from '@/lib/errors'
+import type { RecordSizes } from '@/lib/contract/record-columns'
 import { inSlices } from '@/lib/in-slices'
 import type { Chain } from '@/lib/kinematics/chain'
 import { createWorkspace, type Workspace } from '@/lib/kinematics/create-workspace'
-import { type Task, createTask, type TaskFrame, type TwistComponent } from '@/lib/kinematics/task'
+import { LINEAR_COMPONENTS, type Task, createTask, type TaskFrame, type TwistComponent } from '@/lib/kinematics/task'
 import { transformOfPose } from '@/lib/math/quaternion'
 import { chainOf, loadRevision } from './load-chain'
 import { fullUnits, jointKinds, type Kind, POSITION_KINDS, SiReader, SiWriter } from './si'
@@ -26,6 +26,8 @@ export interface Begun {
   readonly characteristicLength: number
   readonly read: SiReader
   readonly write: SiWriter
+  /** What the layout of a binary record depends on. */
+  readonly sizesOf: (task: Task, more?: { readonly links?: number; readonly matrices?: boolean }) => RecordSizes
   /** Everything of the answer but its results. */
   readonly envelope: {
     model: z.infer<typeof ModelReference>
@@ -63,6 +65,10 @@ export async function begin(caller: Caller, at: Pick<Located, 'model' | 'revisio
     characteristicLength,
     read,
     write: new SiWriter(read.units),
+    sizesOf: ({ rows }, { links = 0, matrices = false } = {}) => {
+      const linearComponents = rows.filter((row) => row < LINEAR_COMPONENTS).length
+      return { joints: kinds.length, linearComponents, angularComponents: rows.length - linearComponents, links, matrices }
+    },
     envelope: {
       model: {
         team: caller.team.slug,
@@ -82,17 +88,3 @@ export async function begin(caller: Caller, at: Pick<Located, 'model' | 'revisio
 /** The task of a question; all six components in the base frame when left out. */
 export const taskOf = (task: { components?: readonly TwistComponent[] | undefined; frame?: TaskFrame | undefined } | undefined): Task =>
   createTask(task?.components, task?.frame)
-
-/** What one JSON number takes in an answer, at the most: sign, 17 digits, point, exponent and comma. */
-const BYTES_A_NUMBER = 25
-const MOST_ANSWER_BYTES = 64 * 1024 * 1024
-/** Names, brackets and words beside the numbers of one result. */
-const BYTES_A_RESULT = 400
-
-/** Fails with answer-too-large when results of this many numbers would exceed 64 MiB. */
-export function checkAnswerSize(results: number, numbersEach: number, what = 'configurations'): void {
-  const bytes = results * (BYTES_A_RESULT + numbersEach * BYTES_A_NUMBER)
-  if (bytes <= MOST_ANSWER_BYTES) return
-  const most = Math.floor(MOST_ANSWER_BYTES / (BYTES_A_RESULT + numbersEach * BYTES_A_NUMBER))
-  fail('answer-too-large', `The answer was estimated at ${Math.ceil(bytes / 1024 / 1024)} MiB, and 64 MiB is the most. Send at most ${most} ${what} at once, or name the fields you need in "include".`)
-}

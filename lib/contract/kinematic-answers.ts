@@ -35,6 +35,14 @@ export const ForwardKinematicsResult = z.strictObject({
 export const JacobianResult = z.strictObject({
   jacobian: Matrix.optional().meta({ description: '6 x n, rows in twist order.' }),
   singularValues: Values.optional(),
+  translationalSingularValues: Values.optional().meta({
+    description:
+      'Of the linear components of the task by themselves, whatever the characteristic length: m/s of the tool for a unit of joint rates ' +
+      '(m/rad for turning joints, 1 for sliding ones). Empty where the task has no linear component.',
+  }),
+  rotationalSingularValues: Values.optional().meta({
+    description: 'Of the angular components of the task by themselves: rad/s of the tool for a unit of joint rates. Empty where the task has no angular component.',
+  }),
   rank: z.int().optional(),
   manipulability: z.number().nullable().optional().meta({ description: 'Product of the singular values.' }),
   conditionNumber: z.number().nullable().optional().meta({ description: 'First singular value over the last; null at a singular pose.' }),
@@ -84,6 +92,8 @@ export const JointRatesResult = z.strictObject({
     .optional(),
 })
 
+export const INVERSE_KINEMATICS_REASONS = ['unreachable', 'at-limits', 'stalled'] as const
+
 export const InverseKinematicsResult = z.strictObject({
   converged: z.boolean().optional(),
   configuration: Values.optional().meta({ description: 'Within the joint limits; the best that was found where none reaches the target.' }),
@@ -91,7 +101,7 @@ export const InverseKinematicsResult = z.strictObject({
   orientationError: z.number().optional(),
   iterations: z.int().optional().meta({ description: 'Over all attempts.' }),
   attempts: z.int().optional(),
-  reason: z.enum(['unreachable', 'at-limits', 'stalled']).optional().meta({ description: 'Left out where it converged.' }),
+  reason: z.enum(INVERSE_KINEMATICS_REASONS).optional().meta({ description: 'Left out where it converged.' }),
 })
 
 const answerOf = <T extends z.ZodType>(item: T) => z.strictObject({ ...envelope, results: z.array(item) })

@@ -12,6 +12,7 @@ import {
 } from './kinematic-answers'
 import { ForwardKinematicsQuestion, InverseKinematicsQuestion, JacobianQuestion, JointRatesQuestion, NullSpaceQuestion } from './kinematic-questions'
 import { operation } from './operation'
+import { RECORD_FORMS } from './record-questions'
 
 const REVISION = '/teams/{team}/models/{model}/revisions/{revision}'
 
@@ -30,6 +31,7 @@ export const KINEMATIC_OPERATIONS = {
     body: ForwardKinematicsQuestion,
     answer: { status: 200, schema: ForwardKinematicsAnswer },
     item: ForwardKinematicsResult,
+    records: RECORD_FORMS.forwardKinematics,
     errors: [...errors, 'link-not-determined'],
     pinned: true,
     example: { units: SHOP_UNITS, configurations: [ELBOW_UP] },
@@ -43,6 +45,7 @@ export const KINEMATIC_OPERATIONS = {
     body: JacobianQuestion,
     answer: { status: 200, schema: JacobianAnswer },
     item: JacobianResult,
+    records: RECORD_FORMS.jacobian,
     errors,
     pinned: true,
     example: { units: SHOP_UNITS, configurations: [ELBOW_UP], frame: 'tip' },
@@ -56,6 +59,7 @@ export const KINEMATIC_OPERATIONS = {
     body: NullSpaceQuestion,
     answer: { status: 200, schema: NullSpaceAnswer },
     item: NullSpaceResult,
+    records: RECORD_FORMS.nullSpace,
     errors,
     pinned: true,
     example: { units: { angle: 'deg' }, configurations: [ELBOW_UP] },
@@ -71,6 +75,7 @@ export const KINEMATIC_OPERATIONS = {
     body: JointRatesQuestion,
     answer: { status: 200, schema: JointRatesAnswer },
     item: JointRatesResult,
+    records: RECORD_FORMS.jointRates,
     errors,
     pinned: true,
     example: {
@@ -91,6 +96,7 @@ export const KINEMATIC_OPERATIONS = {
     body: InverseKinematicsQuestion,
     answer: { status: 200, schema: InverseKinematicsAnswer },
     item: InverseKinematicsResult,
+    records: RECORD_FORMS.inverseKinematics,
     errors: [...errors, 'budget-exceeded'],
     pinned: true,
     example: {

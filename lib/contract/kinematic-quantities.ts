@@ -12,12 +12,15 @@ export const UnitsAnswer = z.strictObject({ length: z.enum(LENGTH_UNITS), angle:
 
 const Position = z.array(z.number()).length(3).meta({ description: '[x, y, z]', example: [0.4, 0, 0.6] })
 
+export const NOT_UNIT = 'the norm of a quaternion [x, y, z, w] must be within 0.001 of 1'
+
+/** Whether a quaternion can be normalised without guessing. */
+export const isNearlyUnit = (q: readonly number[]): boolean => Math.abs(Math.sqrt(q.reduce((sum, part) => sum + part * part, 0)) - 1) <= QUATERNION_SLACK
+
 const Quaternion = z
   .array(z.number())
   .length(4)
-  .refine((q) => Math.abs(Math.sqrt(q.reduce((sum, part) => sum + part * part, 0)) - 1) <= QUATERNION_SLACK, {
-    message: 'the norm of a quaternion [x, y, z, w] must be within 0.001 of 1',
-  })
+  .refine(isNearlyUnit, { message: NOT_UNIT })
   .meta({ description: '[x, y, z, w]; a norm within 0.001 of 1 is normalised.', example: [0, 0, 0, 1] })
 
 /** A pose as a caller sends it. */

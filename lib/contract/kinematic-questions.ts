@@ -9,10 +9,13 @@ const Configurations = z
   .max(MOST_CONFIGURATIONS, `at most ${MOST_CONFIGURATIONS} configurations at once`)
   .meta({ description: 'Joint values in the order of chain.joints.', example: [[0, -0.6, 0, 1.2, 0, 0.8, 0]] })
 
+/** Bounded, because a name that no link has is repeated in the answer. */
+const LinkName = z.string().max(1000)
+
 /** The fields of every kinematics question. */
 const common = {
   chain: z
-    .strictObject({ base: z.string().optional(), tip: z.string().optional() })
+    .strictObject({ base: LinkName.optional(), tip: LinkName.optional() })
     .optional()
     .meta({ description: 'Two links; the default chain when left out.' }),
   units: UnitsQuestion.optional(),
@@ -35,11 +38,13 @@ const include = <const F extends readonly [string, ...string[]]>(fields: F) =>
     .optional()
     .meta({ description: 'The result fields wanted: exactly these are answered. Left out: all but projector.' })
 
-const Gains = z.strictObject({ position: z.number().min(0).optional(), orientation: z.number().min(0).optional() })
+export const Gains = z.strictObject({ position: z.number().min(0).optional(), orientation: z.number().min(0).optional() })
   .meta({ description: '1/s; 1 when left out.' })
 
 export const FORWARD_KINEMATICS_FIELDS = ['pose', 'links', 'withinLimits', 'violations'] as const
-export const JACOBIAN_FIELDS = ['jacobian', 'singularValues', 'rank', 'manipulability', 'conditionNumber'] as const
+export const JACOBIAN_FIELDS = [
+  'jacobian', 'singularValues', 'translationalSingularValues', 'rotationalSingularValues', 'rank', 'manipulability', 'conditionNumber',
+] as const
 export const NULL_SPACE_FIELDS = ['rank', 'nullity', 'singularValues', 'basis', 'lostDirections', 'projector'] as const
 export const JOINT_RATES_FIELDS = [
   'rates', 'primaryRates', 'secondaryRates', 'scale', 'secondaryScale', 'achievedTwist', 'residual', 'singularValues',
@@ -50,7 +55,7 @@ export const INVERSE_KINEMATICS_FIELDS = ['converged', 'configuration', 'positio
 
 export const ForwardKinematicsQuestion = z.strictObject({
   ...common,
-  links: z.array(z.string()).max(500).optional().meta({ description: 'Links wanted besides the tip.' }),
+  links: z.array(LinkName).max(500).optional().meta({ description: 'Links wanted besides the tip.' }),
   include: include(FORWARD_KINEMATICS_FIELDS),
 })
 
@@ -80,6 +85,20 @@ function areComparable(weights: readonly number[]): boolean {
   const least = weights.reduce((a, b) => Math.min(a, b), WIDEST_WEIGHTS)
   const most = weights.reduce((a, b) => Math.max(a, b), 0)
   return least < 1 / WIDEST_WEIGHTS || most > WIDEST_WEIGHTS || most <= WIDEST_WEIGHTS * least
+}
+
+/** What of the rate limits needs what else of them. */
+export function checkRateLimits(
+  limits: { readonly accelerations?: unknown; readonly previousRates?: unknown; readonly dt?: unknown } | undefined,
+  context: z.RefinementCtx,
+): void {
+  const { accelerations, previousRates, dt } = limits ?? {}
+  if (accelerations !== undefined && dt === undefined) {
+    context.addIssue({ code: 'custom', path: ['limits', 'dt'], message: 'is missing: acceleration limits need the period' })
+  }
+  if (previousRates !== undefined && accelerations === undefined) {
+    context.addIssue({ code: 'custom', path: ['limits', 'accelerations'], message: 'is missing: previous rates do nothing without acceleration limits' })
+  }
 }
 
 export const JointRatesQuestion = z
@@ -128,13 +147,7 @@ export const JointRatesQuestion = z
     if ((question.twists === undefined) === (question.references === undefined)) {
       context.addIssue({ code: 'custom', path: [], message: 'send exactly one of "twists" and "references"' })
     }
-    const { accelerations, previousRates, dt } = question.limits ?? {}
-    if (accelerations !== undefined && dt === undefined) {
-      context.addIssue({ code: 'custom', path: ['limits', 'dt'], message: 'is missing: acceleration limits need the period' })
-    }
-    if (previousRates !== undefined && accelerations === undefined) {
-      context.addIssue({ code: 'custom', path: ['limits', 'accelerations'], message: 'is missing: previous rates do nothing without acceleration limits' })
-    }
+    checkRateLimits(question.limits, context)
   })
 
 export const MOST_ATTEMPTS = 64

@@ -1,5 +1,6 @@
 import type { z } from 'zod'
 import type { ProblemCode } from '@/lib/errors'
+import type { RecordForm } from './record-form'
 
 export type Method = 'GET' | 'POST' | 'PUT' | 'PATCH' | 'DELETE'
 
@@ -23,8 +24,10 @@ export interface Operation {
     /** Set when the answer is bytes and not JSON. */
     readonly mediaType?: string
   }
-  /** The `results` of the answer are many: each is parsed and written with `item`, in slices. */
-  readonly item?: z.ZodType
+  /** The `results` of the answer are many: each is worked out, parsed with `item` and written by itself, in slices. */
+  readonly item?: z.ZodObject
+  /** Takes binary records, and answers CSV and binary records besides JSON: one for each of the `results`. */
+  readonly records?: RecordForm
   /** Problems beyond those that follow from the rest of the declaration (see common-problems.ts). */
   readonly errors: readonly ProblemCode[]
   /** Honours If-Match: "<fingerprint>" and answers Model-Fingerprint. */

@@ -1,44 +1,67 @@
 import { createHash } from 'node:crypto'
 import type { z } from 'zod'
-import type { Answer } from '@/lib/access/use-case'
+import type { Answer, Series } from '@/lib/access/use-case'
 import type { Located } from '@/lib/access/locate'
 import type { Operation } from '@/lib/contract/operation'
-import { inSlices } from '@/lib/in-slices'
+import { finishInSlices, passTurn } from '@/lib/in-slices'
+import { checkAnswerSize } from './answer-size'
+import { CSV_TYPE, JSON_TYPE, type RecordMediaType } from './media-types'
 import type { RequestMark } from './problem-response'
+import { type Envelope, envelopeFields } from './record-fields'
+import type { ResultWriter, Written } from './result-writer'
+import { binaryWriter } from './write-binary'
+import { csvWriter } from './write-csv'
+import { jsonWriter } from './write-json'
 
 /** Link of every reply of a computing operation. */
 export const CAUTIONS = '</docs/cautions>; rel="help"'
 
 const quoted = (tag: string) => `"${tag}"`
 
-/** The answer as JSON text, in pieces. It is parsed by the declared schema first, so that a field nobody declared never
- *  leaves; long lists of results are parsed and written in slices. */
-async function writeJson(operation: Operation, body: unknown): Promise<string[]> {
-  const { schema } = operation.answer
-  if (schema === undefined) return []
-  const item = operation.item
-  if (item === undefined) return [JSON.stringify(schema.parse(body))]
-  const { results, ...envelope } = body as { results: readonly unknown[] }
-  const head = JSON.stringify(schema.parse({ ...envelope, results: [] }))
-  const pieces = [head.slice(0, head.lastIndexOf('[]')), '[']
-  await inSlices(results.length, (index) => {
-    pieces.push((index === 0 ? '' : ',') + JSON.stringify((item as z.ZodType).parse(results[index])))
-  })
-  return [...pieces, ']}']
+const WRITERS: Readonly<Record<RecordMediaType, (series: Series<unknown>, envelope: Envelope, item: z.ZodObject) => ResultWriter>> = {
+  'application/json': (_series, envelope) => jsonWriter(envelope),
+  'text/csv': (series, _envelope, item) => csvWriter(series, item),
+  'application/octet-stream': (series, { chain }) => binaryWriter(series, chain.joints),
 }
 
-/** Joined to pieces of about this many characters, so that a stream of many small results has few chunks. */
-const CHUNK_CHARACTERS = 64 * 1024
+/** Has the results worked out and writes each of them, parsed by its schema first, so that a field nobody declared never leaves. All is
+ *  written before the first byte is sent, because a failure on the way is a problem and not half an answer. */
+function* writeResults(operation: Operation, item: z.ZodObject, body: object, mediaType: RecordMediaType): Generator<void, Written> {
+  const { results: series, ...rest } = body as { results: Series<unknown> }
+  checkAnswerSize(series, mediaType)
+  const { results: _none, ...envelope } = operation.answer.schema!.parse({ ...rest, results: [] }) as Envelope & { results: [] }
+  const writer = WRITERS[mediaType](series, envelope, item)
+  for (const result of series.steps()) {
+    if (result !== undefined) writer.take(item.parse(result))
+    yield
+  }
+  const { headers, chunks } = yield* writer.finish()
+  return { headers: mediaType === JSON_TYPE ? headers : { ...envelopeFields(envelope), ...headers }, chunks }
+}
 
-function streamOf(pieces: readonly string[]): ReadableStream<Uint8Array> {
+/** The answer in the format asked for. */
+async function write(operation: Operation, body: unknown, mediaType: string): Promise<Written> {
+  const { answer, item } = operation
+  if (item !== undefined) return finishInSlices(writeResults(operation, item, body as object, mediaType as RecordMediaType))
+  if (answer.schema === undefined) return { headers: {}, chunks: body === undefined ? [] : [body as Uint8Array] }
+  return { headers: {}, chunks: [JSON.stringify(answer.schema.parse(body))] }
+}
+
+/** Joined to pieces of about this size, so that a stream of many small results has few chunks. */
+const CHUNK_BYTES = 64 * 1024
+
+function streamOf(chunks: Written['chunks']): ReadableStream<Uint8Array> {
   const encoder = new TextEncoder()
   let next = 0
   return new ReadableStream({
-    pull(controller) {
-      let chunk = ''
-      while (next < pieces.length && chunk.length < CHUNK_CHARACTERS) chunk += pieces[next++]
-      if (chunk !== '') controller.enqueue(encoder.encode(chunk))
-      if (next >= pieces.length) controller.close()
+    async pull(controller) {
+      // A fast reader would have all of it in one turn.
+      await passTurn()
+      let text = ''
+      for (let chunk = chunks[next]; typeof chunk === 'string' && text.length < CHUNK_BYTES; chunk = chunks[++next]) text += chunk
+      if (text !== '') controller.enqueue(encoder.encode(text))
+      else if (next < chunks.length) controller.enqueue(chunks[next++] as Uint8Array)
+      if (next >= chunks.length) controller.close()
     },
   })
 }
@@ -64,6 +87,8 @@ function nextLink(path: string, search: string, cursor: string): string {
 
 export interface AnswerContext {
   readonly request: RequestMark
+  /** What the caller takes of what the operation offers. */
+  readonly mediaType: string
   readonly search: string
   readonly ifNoneMatch: string | null
   readonly at: Partial<Located>
@@ -71,16 +96,21 @@ export interface AnswerContext {
   readonly isFixed: boolean
 }
 
+function digestOf(chunks: Written['chunks']): string {
+  const hash = createHash('sha256')
+  for (const chunk of chunks) hash.update(chunk)
+  return hash.digest('hex').slice(0, 32)
+}
+
 /** What a use-case gave back, as a response by the operation's declaration. */
 export async function answerResponse(operation: Operation, answer: Answer<unknown>, context: AnswerContext): Promise<Response> {
   const headers = new Headers({ 'x-request-id': context.request.id, 'x-content-type-options': 'nosniff', 'cache-control': 'no-store' })
-  const { mediaType, status } = operation.answer
-  const isBytes = mediaType !== undefined
-  const pieces = isBytes ? [] : await writeJson(operation, answer.body)
+  const { status } = operation.answer
+  const written = await write(operation, answer.body, context.mediaType)
 
   let etag = answer.etag
   if (operation.conditional) {
-    etag ??= createHash('sha256').update(isBytes ? (answer.body as Uint8Array) : pieces.join('')).digest('hex').slice(0, 32)
+    etag ??= digestOf(written.chunks)
     headers.set('cache-control', operation.immutable && context.isFixed ? 'private, max-age=31536000, immutable' : 'private, no-cache')
   }
   if (etag !== undefined) headers.set('etag', quoted(etag))
@@ -89,12 +119,14 @@ export async function answerResponse(operation: Operation, answer: Answer<unknow
     headers.set('model-fingerprint', context.at.revision!.fingerprint)
     headers.append('link', CAUTIONS)
   }
+  if (operation.records !== undefined) headers.set('vary', 'Accept')
   const cursor = (answer.body as { nextCursor?: string } | undefined)?.nextCursor
   if (cursor !== undefined) headers.append('link', nextLink(context.request.path, context.search, cursor))
   if (operation.conditional && isKnown(etag!, context.ifNoneMatch)) return new Response(null, { status: 304, headers })
   if (status === 204) return new Response(null, { status, headers })
-  headers.set('content-type', mediaType ?? 'application/json')
-  if (!isBytes) return new Response(streamOf(pieces), { status, headers })
+  headers.set('content-type', context.mediaType === CSV_TYPE ? `${CSV_TYPE}; charset=utf-8; header=present` : context.mediaType)
+  for (const [name, value] of Object.entries(written.headers)) headers.set(name, value)
+  if (operation.answer.mediaType === undefined) return new Response(streamOf(written.chunks), { status, headers })
   headers.set('content-disposition', attachment(answer.fileName ?? 'file'))
   headers.set('content-security-policy', "sandbox; default-src 'none'")
   return new Response(answer.body as BodyInit, { status, headers })

@@ -1,5 +1,4 @@
 import type { NextRequest } from 'next/server'
-import { z } from 'zod'
 import { getDb } from '@/db/client'
 import { locate, type Parameter } from '@/lib/access/locate'
 import { permit } from '@/lib/access/permissions'
@@ -7,14 +6,18 @@ import type { Answer, Ask, UseCase } from '@/lib/access/use-case'
 import type { Operation } from '@/lib/contract/operation'
 import { type OperationName, OPERATIONS } from '@/lib/contract/operations'
 import { fail } from '@/lib/errors'
+import { finishInSlices, passTurn } from '@/lib/in-slices'
 import { log } from '@/lib/log'
-import { checkAccept } from './accept'
+import { chooseMediaType } from './accept'
 import { answerResponse, CAUTIONS } from './answer-response'
 import { authenticate, checkOrigin } from './authenticate'
 import { parsePart, pointerOf } from './faults'
 import { checkIfMatch } from './if-match'
+import { JSON_TYPE, RECORD_MEDIA_TYPES, RECORD_TYPE } from './media-types'
+import { parseBodyInSteps } from './parse-body'
 import { problemResponse } from './problem-response'
-import { checkContentType, discardBody, readForm, readJson } from './read-body'
+import { discardBody, readContentType, readForm, readJson, readRecordBytes } from './read-body'
+import { NO_QUERY, parseQuestion } from './read-question'
 import { requestId } from './request-id'
 import type { RouteHandler } from './route-handler'
 
@@ -28,27 +31,32 @@ function readQuery(search: URLSearchParams): Record<string, string> {
   return query
 }
 
-/** What an operation without a query takes, so that a misplaced `?units=mm` is named and not passed over. */
-const NO_QUERY = z.strictObject({})
-
 /** Reads and parses the parts of a request that the operation declares: 415, 413, 400, 422. */
 async function readParts(operation: Operation, request: NextRequest) {
-  const parseQuery = () => parsePart(operation.query ?? NO_QUERY, readQuery(request.nextUrl.searchParams), '/query')
+  const query = () => readQuery(request.nextUrl.searchParams)
+  const parseQuery = () => parsePart(operation.query ?? NO_QUERY, query(), '/query')
   if (operation.form !== undefined) {
-    checkContentType(request.headers, 'multipart/form-data')
+    readContentType(request.headers, ['multipart/form-data'])
     const { fields, file } = await readForm(request)
-    return { query: parseQuery(), body: undefined, form: parsePart(operation.form, fields, '/form'), file }
+    return { query: parseQuery(), form: parsePart(operation.form, fields, '/form'), file }
   }
-  if (operation.body !== undefined) {
-    checkContentType(request.headers, 'application/json')
-    const body = await readJson(request)
-    return { query: parseQuery(), body: parsePart(operation.body, body, ''), form: undefined, file: undefined }
+  if (operation.body === undefined) return { query: parseQuery() }
+  const { records } = operation
+  if (records !== undefined && readContentType(request.headers, [JSON_TYPE, RECORD_TYPE]) === RECORD_TYPE) {
+    const bytes = await readRecordBytes(request)
+    return { body: parseQuestion(records.question, query()), records: bytes }
   }
-  return { query: parseQuery(), body: undefined, form: undefined, file: undefined }
+  readContentType(request.headers, [JSON_TYPE])
+  const body = await readJson(request)
+  return { query: parseQuery(), body: await finishInSlices(parseBodyInSteps(operation.body, body)) }
 }
 
+/** The formats that the operation answers in. */
+const offered = ({ answer, records }: Operation): readonly [string, ...string[]] => (records === undefined ? [answer.mediaType ?? JSON_TYPE] : RECORD_MEDIA_TYPES)
+
 /** A use-case as a route handler. The order of checks is the contract's:
- *  401, 404, 403, 406, 415, 413, 400, 422, 428, 412, and what the use-case itself refuses. */
+ *  401, 404, 403, 406, 415, 413, 400, 422, 428, 412, and what the use-case itself refuses; that binary records have the length
+ *  that the model's chain gives them is among the latter. */
 export function endpoint<N extends OperationName>(name: N, useCase: UseCase<N>): RouteHandler {
   const operation: Operation = OPERATIONS[name]
   return async (request, { params }) => {
@@ -59,16 +67,21 @@ export function endpoint<N extends OperationName>(name: N, useCase: UseCase<N>):
     try {
       const parameters = (await params) as Partial<Record<Parameter, string>>
       const who = await authenticate(request)
+      // The embedded database computes in this thread: what one stage asks of it and what the next does are two turns.
+      await passTurn()
       by = who.kind === 'key' ? `key ${who.keyId}` : `user ${who.userId}`
       const { caller, at } = await locate(await getDb(), who, parameters)
+      await passTurn()
       checkOrigin(who, operation.method, request.headers)
       permit(caller, name)
-      checkAccept(request.headers, operation.answer.mediaType ?? 'application/json')
+      const mediaType = chooseMediaType(request.headers, offered(operation))
       const parts = await readParts(operation, request)
       checkIfMatch(operation, at, request.headers)
+      await passTurn()
       const answer: Answer<unknown> = await useCase(caller, { at, ...parts } as Ask<N>)
       response = await answerResponse(operation, answer, {
         request: mark,
+        mediaType,
         search: request.nextUrl.search,
         ifNoneMatch: request.headers.get('if-none-match'),
         at,

@@ -2,7 +2,7 @@ import type { z } from 'zod'
 import { fail, type Fault } from '@/lib/errors'
 
 /** More are not listed: a wrong unit in 10 000 rows is one fault to its sender. */
-const MOST_FAULTS = 50
+export const MOST_FAULTS = 50
 
 const escape = (part: PropertyKey) => String(part).replaceAll('~', '~0').replaceAll('/', '~1')
 
@@ -67,7 +67,7 @@ function faultsOf(issues: readonly z.core.$ZodIssue[], value: unknown, prefix: s
 }
 
 /** Beyond this many values only the first fault is looked for: zod keeps an object for each, and a body has room for millions. */
-const MOST_VALUES_TO_SEARCH = 100_000
+const MOST_VALUES_TO_SEARCH = 10_000
 
 /** Whether a parsed JSON value holds more than `most` values, itself included. */
 function holdsMoreThan(most: number, value: unknown): boolean {
@@ -80,15 +80,31 @@ function holdsMoreThan(most: number, value: unknown): boolean {
   return false
 }
 
+interface Checked<T> {
+  /** Undefined where there are faults. */
+  readonly data: T | undefined
+  readonly faults: Fault[]
+}
+
+/** What a schema makes of a value, and every fault it finds, of a very large value the first. prefix: pointer to the value. */
+export function faultsIn<S extends z.ZodType>(schema: S, value: unknown, prefix: string): Checked<z.infer<S>> {
+  // abortEarly is what zod's own validate() sets; here the issue that ended the parse is wanted as well.
+  const quick = schema.safeParse(value, { abortEarly: true } as object)
+  if (quick.success) return { data: quick.data, faults: [] }
+  const parsed = holdsMoreThan(MOST_VALUES_TO_SEARCH, value) ? quick : schema.safeParse(value)
+  return parsed.success ? { data: parsed.data, faults: [] } : { data: undefined, faults: faultsOf(parsed.error.issues, value, prefix) }
+}
+
+/** Fails with invalid-request and the first fifty of these faults, of which there is at least one. */
+export function failWith(faults: readonly Fault[]): never {
+  const errors = faults.slice(0, MOST_FAULTS)
+  const [first] = errors
+  fail('invalid-request', errors.length === 1 ? `${first!.pointer || 'The body'}: ${first!.detail}.` : `${errors.length} places are wrong; see "errors".`, { errors })
+}
+
 /** Parses one part of a request. prefix: '' for a JSON body, '/query' or '/form'. Fails with invalid-request and every fault,
  *  of a very large part with the first. */
 export function parsePart<S extends z.ZodType>(schema: S, value: unknown, prefix: string): z.infer<S> {
-  // abortEarly is what zod's own validate() sets; here the issue that ended the parse is wanted as well.
-  const quick = schema.safeParse(value, { abortEarly: true } as object)
-  if (quick.success) return quick.data
-  const parsed = holdsMoreThan(MOST_VALUES_TO_SEARCH, value) ? quick : schema.safeParse(value)
-  if (parsed.success) return parsed.data
-  const errors = faultsOf(parsed.error.issues, value, prefix).slice(0, MOST_FAULTS)
-  const [first] = errors
-  fail('invalid-request', errors.length === 1 ? `${first!.pointer || 'The body'}: ${first!.detail}.` : `${errors.length} places are wrong; see "errors".`, { errors })
+  const { data, faults } = faultsIn(schema, value, prefix)
+  return faults.length === 0 ? (data as z.infer<S>) : failWith(faults)
 }

@@ -1,11 +1,13 @@
 import { fail } from '@/lib/errors'
 import type { UploadedFile } from '@/lib/access/use-case'
+import { finishInSlices, inSlices } from '@/lib/in-slices'
 import { pointerOf } from './faults'
-import { checkJsonShape } from './json-shape'
+import { parseJsonInSteps } from './parse-json'
 
 const MEBIBYTE = 1024 * 1024
-export const MOST_JSON_BYTES = 8 * MEBIBYTE
-export const MOST_URDF_BYTES = 8 * MEBIBYTE
+const MOST_JSON_BYTES = 8 * MEBIBYTE
+const MOST_RECORD_BYTES = 64 * MEBIBYTE
+const MOST_URDF_BYTES = 8 * MEBIBYTE
 /** What the text fields and the boundaries of a multipart body may take beside the file. */
 const MULTIPART_ROOM = 64 * 1024
 
@@ -34,6 +36,17 @@ export async function discardBody(request: Request): Promise<void> {
   if (Number(request.headers.get('content-length') ?? Infinity) <= MOST_DISCARDED) await discarded
 }
 
+/** The pieces in one, copied in slices. */
+async function joined(pieces: readonly Uint8Array[], length: number): Promise<Uint8Array> {
+  const bytes = new Uint8Array(length)
+  let at = 0
+  await inSlices(pieces.length, (i) => {
+    bytes.set(pieces[i]!, at)
+    at += pieces[i]!.length
+  })
+  return bytes
+}
+
 /** Reads the body up to `most` bytes: fails with too-large. A body that says its length is taken to its end first, so that a
  *  client that closes the connection behind it gets its answer; one that does not is answered while it still sends. */
 async function readBytes(request: Request, most: number, what: string): Promise<Uint8Array> {
@@ -49,7 +62,7 @@ async function readBytes(request: Request, most: number, what: string): Promise<
   const pieces: Uint8Array[] = []
   for (let length = 0; ; ) {
     const { done, value } = await reader.read()
-    if (done) return new Uint8Array(Buffer.concat(pieces, length))
+    if (done) return joined(pieces, length)
     length += value.length
     if (length > most) {
       void discard(reader)
@@ -59,32 +72,44 @@ async function readBytes(request: Request, most: number, what: string): Promise<
   }
 }
 
-/** Fails with unsupported-media-type unless the body is of this type, uncompressed, and UTF-8 where it says a charset. */
-export function checkContentType(headers: Headers, mediaType: string): void {
+/** The type of the body, one of those that are read. Fails with unsupported-media-type unless it is, uncompressed, and UTF-8 where it says
+ *  a charset. */
+export function readContentType<M extends string>(headers: Headers, read: readonly M[]): M {
   const encoding = headers.get('content-encoding')
   if (encoding !== null && encoding.toLowerCase() !== 'identity') fail('unsupported-media-type', 'Send the body without a content encoding.')
   const [name = '', ...parameters] = (headers.get('content-type') ?? '').split(';').map((part) => part.trim().toLowerCase())
-  if (name !== mediaType) fail('unsupported-media-type', `Send the body as ${mediaType}.`)
+  const mediaType = read.find((type) => type === name) ?? fail('unsupported-media-type', `Send the body as ${read.join(' or ')}.`)
   const charset = parameters.find((parameter) => parameter.startsWith('charset='))?.slice(8).replaceAll('"', '')
   if (charset !== undefined && charset !== 'utf-8' && charset !== 'utf8') fail('unsupported-media-type', 'Send the body in UTF-8.')
+  return mediaType
 }
 
 /** The JSON body. Fails with too-large, malformed-body, or invalid-request where it is built to be a burden. */
 export async function readJson(request: Request): Promise<unknown> {
   const bytes = await readBytes(request, MOST_JSON_BYTES, 'The body')
-  let text: string
+  return finishInSlices(parseJsonInSteps(await decodeUtf8(bytes)))
+}
+
+/** Of this many bytes, text beyond ASCII takes about a millisecond. */
+const DECODED_AT_ONCE = 256 * 1024
+
+/** UTF-8 as text, decoded in slices. Fails with malformed-body. */
+async function decodeUtf8(bytes: Uint8Array): Promise<string> {
+  const decoder = new TextDecoder('utf-8', { fatal: true })
+  let text = ''
   try {
-    text = new TextDecoder('utf-8', { fatal: true }).decode(bytes)
-  } catch {
-    fail('malformed-body', 'The body is not UTF-8.')
-  }
-  checkJsonShape(bytes)
-  try {
-    return JSON.parse(text)
+    await inSlices(Math.ceil(bytes.length / DECODED_AT_ONCE), (i) => {
+      text += decoder.decode(bytes.subarray(i * DECODED_AT_ONCE, (i + 1) * DECODED_AT_ONCE), { stream: true })
+    })
+    return text + decoder.decode()
   } catch (error) {
-    fail('malformed-body', `The body is not JSON: ${error instanceof Error ? error.message : 'it does not parse'}.`)
+    if (error instanceof TypeError) fail('malformed-body', 'The body is not UTF-8.')
+    throw error
   }
 }
+
+/** The body as bytes. Fails with too-large. */
+export const readRecordBytes = (request: Request): Promise<Uint8Array> => readBytes(request, MOST_RECORD_BYTES, 'A body of records')
 
 /** The multipart body: its one file and its text fields. Fails with too-large, malformed-body or invalid-request. */
 export async function readForm(request: Request): Promise<{ fields: Record<string, string>; file: UploadedFile }> {

@@ -110,7 +110,7 @@ describe('X-Request-Id', () => {
 })
 
 describe('media types', () => {
-  it.each(['application/json', '*/*', 'application/*', 'text/html, application/xml;q=0.9, */*;q=0.8', 'text/csv;q=0.5, application/json;q=0.4', 'APPLICATION/JSON', ''])(
+  it.each(['application/json', '*/*', 'application/*', 'text/html, application/xml;q=0.9, */*;q=0.8', 'text/csv;q=0.4, application/json;q=0.5', 'APPLICATION/JSON', ''])(
     'answers JSON to Accept: %s',
     async (accept) => {
       const response = await ask(JSON.stringify({ configurations: [REST] }), { accept })
@@ -118,7 +118,17 @@ describe('media types', () => {
     },
   )
 
-  it.each(['text/csv', 'text/html', 'application/json;q=0', 'application/json;q=0, */*', 'application/xml, text/*', 'application/octet-stream'])(
+  it.each([
+    ['text/csv', 'text/csv; charset=utf-8; header=present'],
+    ['text/csv;q=0.5, application/json;q=0.4', 'text/csv; charset=utf-8; header=present'],
+    ['application/json;q=0, */*', 'text/csv; charset=utf-8; header=present'],
+    ['application/octet-stream, text/csv;q=0.9', 'application/octet-stream'],
+  ])('answers records to Accept: %s', async (accept, type) => {
+    const response = await ask(JSON.stringify({ configurations: [REST] }), { accept })
+    expect([response.status, response.headers['content-type']]).toEqual([200, type])
+  })
+
+  it.each(['text/html', 'application/json;q=0', 'application/xml, image/*', 'text/csv;q=0, application/json;q=0.0'])(
     'has nothing for Accept: %s',
     async (accept) => expectProblem(await ask(JSON.stringify({ configurations: [REST] }), { accept }), 'not-acceptable'),
   )
@@ -130,7 +140,7 @@ describe('media types', () => {
   it.each([
     { 'content-type': 'text/plain' },
     { 'content-type': 'application/json; charset=iso-8859-1' },
-    { 'content-type': 'application/octet-stream' },
+    { 'content-type': 'text/csv' },
     { 'content-type': 'multipart/form-data; boundary=x' },
     { 'content-encoding': 'gzip' },
   ])('does not read %o', async (headers) => expectProblem(await ask(JSON.stringify({ configurations: [REST] }), headers), 'unsupported-media-type'))

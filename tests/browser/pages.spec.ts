@@ -32,6 +32,7 @@ const LOOKS: readonly Look[] = [
   { name: 'docs-problem', path: '/docs/problems/fingerprint-mismatch' },
   { name: 'docs-findings', path: '/docs/findings' },
   { name: 'docs-finding', path: '/docs/findings/axis-normalised' },
+  { name: 'docs-formats', path: '/docs/formats' },
   { name: 'docs-methods', path: '/docs/methods' },
   { name: 'docs-cautions', path: '/docs/cautions' },
   { name: 'nothing-here', path: '/docs/nothing-here', expected: NOT_FOUND },

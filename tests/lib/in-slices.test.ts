@@ -25,7 +25,7 @@ describe('inSlices', () => {
     setImmediate(other)
     await inSlices(50, work)
     isRunning = false
-    // 50 ms of work in slices of 5: at least a few turns, however slow the machine.
+    // 50 ms of work in slices of 2: at least a few turns, however slow the machine.
     expect(turns).toBeGreaterThan(3)
   })
 

@@ -84,11 +84,25 @@ describe('the committed OpenAPI document', () => {
 
   it('forbids unknown fields in every body and query that it describes', () => {
     for (const { operation } of described) {
-      for (const { schema } of Object.values(operation.requestBody?.content ?? {})) {
+      for (const [mediaType, { schema }] of Object.entries(operation.requestBody?.content ?? {})) {
+        if (mediaType === 'application/octet-stream') continue
         const { $ref, ...inline } = schema as { $ref?: string; additionalProperties?: boolean }
         const whole = $ref === undefined ? inline : (document.components.schemas[$ref.split('/').at(-1)!] as typeof inline)
         expect(whole.additionalProperties, operation.operationId).toBe(false)
       }
+    }
+  })
+
+  it('offers records in and out, with their fields, exactly where the contract does', () => {
+    for (const { operation } of described) {
+      const { records } = (OPERATIONS as Record<string, Operation>)[operation.operationId]!
+      const isOffered = records !== undefined
+      expect(Object.keys(operation.requestBody?.content ?? {}).includes('application/octet-stream'), operation.operationId).toBe(isOffered)
+      const { content = {}, headers = {} } = (operation.responses['200'] ?? {}) as { content?: object; headers?: object }
+      expect('text/csv' in content && 'application/octet-stream' in content && 'Record-Layout' in headers).toBe(isOffered)
+      const question = operation.parameters.find(({ name }) => name === 'question') as { description?: string } | undefined
+      for (const field of Object.keys(records?.question.shape ?? {})) expect(question?.description).toContain(field)
+      expect(question !== undefined).toBe(isOffered)
     }
   })
 })

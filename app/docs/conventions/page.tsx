@@ -3,6 +3,7 @@ import { DocsPage } from '@/components/docs/docs-page'
 import { FactTable } from '@/components/docs/fact-table'
 import { Formula } from '@/components/docs/formula'
 import { FramesSketch } from '@/components/docs/frames-sketch'
+import { TextLink } from '@/components/ui/text-link'
 
 export const metadata: Metadata = { title: 'Conventions' }
 
@@ -57,6 +58,7 @@ export default function ConventionsPage() {
         rows={[
           ['Joint values, limits, positions, twists, rates, errors, the Jacobian', <>as chosen in <code key="u">units</code>: m or mm, rad or deg</>],
           ['Basis of the null space, projector, lost directions', 'always SI'],
+          ['Translational and rotational singular values', 'always SI: m/s and rad/s for a unit of joint rates; no characteristic length'],
           ['Singular values, manipulability, condition number, damping, thresholds', 'always SI; linear rows divided by the characteristic length where one is given'],
           ['Gains', '1/s'],
         ]}
@@ -77,7 +79,11 @@ export default function ConventionsPage() {
       <h2>Matrices and missing values</h2>
       <p>
         Matrices are nested arrays, row by row. A limit that does not exist is <code>null</code>, as is a condition number that is not finite. NaN and
-        infinity never appear.
+        infinity never appear in JSON. CSV leaves a cell empty for <code>null</code>, and in binary records NaN stands for it: see{' '}
+        <TextLink inline href="/docs/formats">
+          formats
+        </TextLink>
+        .
       </p>
     </DocsPage>
   )

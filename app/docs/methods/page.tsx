@@ -1,6 +1,7 @@
 import type { Metadata } from 'next'
 import { DocsPage } from '@/components/docs/docs-page'
 import { Formula } from '@/components/docs/formula'
+import { MethodNoteList } from '@/components/docs/method-note-list'
 import { SourceList } from '@/components/docs/source-list'
 
 export const metadata: Metadata = { title: 'Methods and sources' }
@@ -27,7 +28,11 @@ export default function MethodsPage() {
 
 M(q) = I + sin q [a]× + (1 − cos q) [a]×²    revolute, continuous
 M(q) = Trans(q · a)                          prismatic`}</Formula>
-      <p>A joint that mimics another moves by its multiplier times the value of the other plus its offset. Fixed joints are multiplied out once.</p>
+      <p>
+        A joint that mimics another moves by its multiplier times the value of the other plus its offset. Fixed joints are multiplied out once. The rotation
+        about an axis is the formula of Rodrigues (Siciliano, Sciavicco, Villani and Oriolo 2009, section 2.5).
+      </p>
+      <MethodNoteList of="forward-kinematics" />
 
       <h2 id="jacobian">Geometric Jacobian</h2>
       <p>
@@ -40,6 +45,7 @@ J(i) = [ z ; 0 ]              prismatic`}</Formula>
         In base axes, or turned into the axes of the tool. A mimic joint adds its column, times its multiplier, to that of the joint it follows (Whitney
         1972; Siciliano, Sciavicco, Villani and Oriolo 2009, section 3.1).
       </p>
+      <MethodNoteList of="jacobian" />
 
       <h2 id="measures">Singular values, rank, manipulability, condition number</h2>
       <p>
@@ -47,6 +53,13 @@ J(i) = [ z ; 0 ]              prismatic`}</Formula>
         above the tolerance times the largest. Manipulability is the product of the singular values (Yoshikawa 1985), the condition number the first over
         the last (Salisbury and Craig 1982; the characteristic length after Angeles and López-Cajún 1992).
       </p>
+      <Formula>{`w = σ₁ σ₂ … σₘ        κ = σ₁ / σₘ        rank = number of σ > tolerance · σ₁`}</Formula>
+      <p>
+        The linear and the angular rows are decomposed by themselves, too: <code>translationalSingularValues</code> and{' '}
+        <code>rotationalSingularValues</code>, each of one unit and free of the characteristic length. A task without linear, or without angular, components
+        has none of them.
+      </p>
+      <MethodNoteList of="measures" />
 
       <h2 id="null-space">Null space and its canonical basis</h2>
       <p>Joint rates that the task does not feel are those in the image of the projector (Liégeois 1977; Klein and Huang 1983):</p>
@@ -65,6 +78,7 @@ J(i) = [ z ; 0 ]              prismatic`}</Formula>
         Directions of the tool that no joint rates produce are answered as lost, by the same rule. A lost direction is <em>structural</em> when the chain can
         produce it at no pose: it is lost at each of 32 seeded configurations.
       </p>
+      <MethodNoteList of="null-space" />
 
       <h2 id="inverse">The inverse of a task</h2>
       <p>
@@ -91,6 +105,7 @@ filtered          λ by direction   where σ < ε, else 0`}</Formula>
         to the weighted inverse and is oblique:
       </p>
       <Formula>{`J_W⁺ = W⁻¹Jᵀ (J W⁻¹ Jᵀ)⁻¹        N = I − J_W⁺ J`}</Formula>
+      <MethodNoteList of="inverse" />
 
       <h2 id="objectives">Spending spare freedom</h2>
       <p>A wish for the joints is projected into the null space, so that the task does not feel it (Liégeois 1977):</p>
@@ -103,6 +118,7 @@ manipulability  q̇₀ = gain · ∂w/∂q,   ∂w/∂qᵢ = w · tr(∂J/∂q�
         A posture is approached the short way round on continuous joints. The second is the joint-range objective of Siciliano and others 2009, section 3.5; a joint without both limits takes no part. The projector always
         comes from the undamped inverse: one made of a damped inverse would leak into the task.
       </p>
+      <MethodNoteList of="objectives" />
 
       <h2 id="limits">Rate limits</h2>
       <p>
@@ -126,6 +142,7 @@ rate ≤ min( limit, A dt (r + m (m + 1) / 2) / (m + 1) )`}</Formula>
         With <code>previousRates</code> no rate changes by more than <code>A dt</code>. Where these exclude each other, position wins, then the slowing down.
         A motion back inside a limit is never refused.
       </p>
+      <MethodNoteList of="limits" />
 
       <h2 id="closed-loop">Closed loop</h2>
       <p>Open loop, small errors add up. A reference pose with gains works them off (Siciliano and others 2009, section 3.7):</p>
@@ -134,15 +151,18 @@ rate ≤ min( limit, A dt (r + m (m + 1) / 2) / (m + 1) )`}</Formula>
         <code>ϑ r</code> is the rotation vector from the tool to the reference, the short way round. Called with a period of <code>dt</code>, the loop is
         stable for <code>0 &lt; K · dt &lt; 2</code>; beyond that the diagnosis says <code>gain-too-high</code>.
       </p>
+      <MethodNoteList of="closed-loop" />
 
       <h2 id="inverse-kinematics">Inverse kinematics</h2>
       <p>
-        A configuration is looked for by damped steps that keep the joint limits, from the seed or the middle of the ranges, then from points of an even
-        sequence over the ranges: the same question has the same answer everywhere. What is found is the pose within the tolerances, or the best that was
+        A configuration is looked for by steps of Levenberg and Marquardt whose damping shrinks with the square of the error (Sugihara 2011), joints that meet
+        a limit being held there: from the seed or the middle of the ranges, then from points of an even sequence over the ranges (Richtmyer 1951). The same question has the same answer everywhere. What is found is the pose within the tolerances, or the best that was
         met and why no better: <code>unreachable</code>, <code>at-limits</code> or <code>stalled</code>. The reason is a judgement
         from the attempts that were made: more <code>attempts</code> may still find a way. Spare freedom is then spent on the objectives. The
         motion from one configuration to another is not examined.
       </p>
+      <Formula>{`q ← q + Σ σ / (σ² + λ²) (uᵀe) w        e = [ p(target) − p ; ϑ r ]        λ² ∝ |e|²`}</Formula>
+      <MethodNoteList of="inverse-kinematics" />
 
       <h2 id="diagnosis">Diagnosis</h2>
       <p>
@@ -164,6 +184,7 @@ rate ≤ min( limit, A dt (r + m (m + 1) / 2) / (m + 1) )`}</Formula>
           <code>at-limit</code>, <code>outside-limits</code>: a joint within 1e-9 of a limit is driven outward, or one is beyond it.
         </li>
       </ul>
+      <MethodNoteList of="diagnosis" />
 
       <h2 id="sources">Sources</h2>
       <SourceList />

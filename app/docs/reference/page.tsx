@@ -2,6 +2,7 @@ import type { Metadata } from 'next'
 import { Neighbours } from '@/components/docs/docs-page'
 import { Reference } from '@/components/docs/reference'
 import { Caution } from '@/components/shell/caution'
+import { TextLink } from '@/components/ui/text-link'
 
 export const metadata: Metadata = { title: 'API reference' }
 
@@ -13,7 +14,12 @@ export default function ReferencePage() {
         <h1>API reference</h1>
         <p className="mt-1 max-w-[44rem] text-15 text-soft">
           Generated from the same declarations that the service checks each request with. <b className="font-semibold text-ink">Try it out</b> sends real
-          requests: signed in, you act as yourself; with <b className="font-semibold text-ink">Authorize</b>, as the key that you type in.
+          requests: signed in, you act as yourself; with <b className="font-semibold text-ink">Authorize</b>, as the key that you type in. Questions and answers in
+          binary records and CSV are described under{' '}
+          <TextLink inline href="/docs/formats">
+            formats
+          </TextLink>
+          .
         </p>
         <Caution className="mt-2 max-w-[44rem]" />
         <h2 className="mt-6 text-18">Operations</h2>

@@ -127,10 +127,6 @@ describe('what is not there yet', () => {
       expect(pointersOf(response)).toEqual(['/secondary/1/objective'])
     }
   })
-
-  it.each(QUESTIONS)('is any format of %s but JSON', async (question) => {
-    for (const accept of ['text/csv', 'application/octet-stream']) expectProblem(await ask(question, 'trainer-3r', asked(question), { accept }), 'not-acceptable')
-  })
 })
 
 /** Fields that are right by themselves, or nearly, and wrong where they stand. */

@@ -78,3 +78,32 @@ describe('the measures', () => {
     expectClose(alongToolX.singularValues, [Math.sqrt(5)], 1e-12)
   })
 })
+
+describe('the parts', () => {
+  const parts = ['translationalSingularValues', 'rotationalSingularValues']
+
+  it('are of the linear and the angular rows by themselves: those of J2 by their closed form', async () => {
+    const { translationalSingularValues, rotationalSingularValues } = await resultOf('jacobian', 'trainer-3r', { ...BENT, include: parts })
+    // The squares are the eigenvalues of the 2 x 2 matrix J2 J2ᵀ.
+    const rowTimesRow = (i: number, j: number) => J2[i]!.reduce((sum, value, column) => sum + value * J2[j]![column]!, 0)
+    const [a, b, d] = [rowTimesRow(0, 0), rowTimesRow(0, 1), rowTimesRow(1, 1)]
+    const root = Math.hypot((a - d) / 2, b)
+    expectClose(translationalSingularValues, [Math.sqrt((a + d) / 2 + root), Math.sqrt((a + d) / 2 - root), 0], 1e-9)
+    expectClose(rotationalSingularValues, [Math.sqrt(3), 0, 0], 1e-12)
+  })
+
+  it('are in SI whatever the units, and free of the characteristic length', async () => {
+    const asked = (more: object) => resultOf('jacobian', 'gannet-4', { configurations: [[0.3, -0.7, 0.05, 0.5]], include: parts, ...more })
+    const plain = await asked({})
+    expect(await asked({ characteristicLength: 0.1 })).toEqual(plain)
+    const q = [0.3, -0.7, 0.05, 0.5].map((value, i) => (i === 2 ? value * 1000 : (value * 180) / Math.PI))
+    const shop = await asked({ units: { length: 'mm', angle: 'deg' }, configurations: [q] })
+    expectClose(shop.translationalSingularValues, plain.translationalSingularValues!, 1e-12)
+    expectClose(shop.rotationalSingularValues, plain.rotationalSingularValues!, 1e-12)
+  })
+
+  it('are empty where the task has no component of the kind', async () => {
+    expect(await resultOf('jacobian', 'trainer-3r', { ...BENT, include: parts, task: { components: ['wz'] } })).toEqual({ translationalSingularValues: [], rotationalSingularValues: [expect.closeTo(Math.sqrt(3), 12)] })
+    expect((await resultOf('jacobian', 'trainer-3r', { ...BENT, include: parts, task: { components: ['vx', 'vy'] } })).rotationalSingularValues).toEqual([])
+  })
+})
