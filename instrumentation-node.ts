@@ -1,4 +1,5 @@
 import { database, type Database } from '@/db/client'
+import { endReaders } from '@/lib/catalog/reader-pool'
 import { sessionSecret } from '@/lib/env'
 import { log } from '@/lib/log'
 import { announceSetup } from '@/lib/teams/setup-code'
@@ -36,6 +37,7 @@ function closeOnSignal(opened: Database): void {
     if (isClosing) return
     isClosing = true
     try {
+      await endReaders()
       await opened.close()
       log.info(`database closed on ${signal}`)
       process.exit(0)

@@ -5,10 +5,11 @@ import path from 'node:path'
 import type { PgDatabase, PgQueryResultHKT } from 'drizzle-orm/pg-core'
 import { databaseUrl, dataDir, isBuilding, isDatabaseInMemory } from '@/lib/env'
 import * as catalog from './schema/catalog'
+import * as evidence from './schema/evidence'
 import * as keys from './schema/keys'
 import * as people from './schema/people'
 
-export const schema = { ...people, ...catalog, ...keys }
+export const schema = { ...people, ...catalog, ...evidence, ...keys }
 
 /** One type for both drivers: the embedded one and the server's extend PgDatabase, and so does a transaction. */
 export type Db = PgDatabase<PgQueryResultHKT, typeof schema>

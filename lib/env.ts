@@ -44,6 +44,8 @@ export function sessionSecret(): string {
 }
 
 export const isProduction = (): boolean => process.env.NODE_ENV === 'production'
+/** True in the service that Next serves; false in the commands beside it. */
+export const isService = (): boolean => process.env.NEXT_RUNTIME === 'nodejs'
 export const isBuilding = (): boolean => process.env.NEXT_PHASE === 'phase-production-build'
 export const logLevel = (): string => text('LOG_LEVEL') ?? 'info'
 export const demoPassword = (): string | undefined => text('DEMO_PASSWORD')

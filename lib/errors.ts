@@ -4,7 +4,7 @@ export const PROBLEMS = {
   'malformed-body': {
     status: 400,
     title: 'The body does not parse',
-    meaning: 'The body is not what its content type says: broken JSON, JSON that is not UTF-8, broken multipart, or bytes that are no whole number of records.',
+    meaning: 'The body is not what its content type says: broken JSON, JSON that is not UTF-8, broken multipart, a table that is no CSV, or bytes that are no whole number of records.',
     remedy: 'Check the body with a JSON or multipart library before sending; the detail says where reading stopped, or how many bytes a record has.',
   },
   'sign-in-required': {
@@ -102,6 +102,12 @@ export const PROBLEMS = {
     title: 'No such key',
     meaning: 'No key of this team has this id.',
     remedy: 'List the keys of the team.',
+  },
+  'reference-poses-not-found': {
+    status: 404,
+    title: 'No such reference poses',
+    meaning: 'The revision has no set of reference poses of this number.',
+    remedy: 'List the reference poses of the revision; they count from 1.',
   },
   'method-not-allowed': {
     status: 405,
@@ -210,6 +216,18 @@ export const PROBLEMS = {
     title: 'Not from this status',
     meaning: 'The revision cannot go from its present status to the one asked for.',
     remedy: 'Read the revision again; the detail says which status it has.',
+  },
+  'not-released': {
+    status: 409,
+    title: 'It was never released',
+    meaning: 'Check vectors belong to revisions that were released, and this one never was.',
+    remedy: 'Have the revision released, or name one that was. Until then ask for poses and Jacobians at configurations of your own.',
+  },
+  'evidence-missing': {
+    status: 409,
+    title: 'Evidence is missing',
+    meaning: 'This team releases a revision only when its newest reference poses pass, and they do not, or there are none.',
+    remedy: 'Store measured reference poses with the revision. Where they fail, find out whether the model or the measurement is wrong.',
   },
   'four-eyes': {
     status: 409,

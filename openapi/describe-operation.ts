@@ -13,6 +13,7 @@ const PARAMETERS: Readonly<Record<string, { description: string; example: string
   model: { description: 'Slug of the model.', example: 'skerry-7' },
   revision: { description: 'Number of the revision, or "released" for the one in force.', example: 'released' },
   key: { description: 'Id of the key.', example: '4fXk02MzQ8aT' },
+  set: { description: 'Number of the reference poses within the revision.', example: '1' },
 }
 
 const parametersOf = (path: string) =>
@@ -89,7 +90,9 @@ const RECORDS_OUT = {
   'application/octet-stream': { schema: BYTES.meta({ format: 'binary', description: 'Little-endian binary64 records, laid out as Record-Layout says.' }) },
 }
 
-function successOf({ answer, pinned, records }: Operation): RouteConfig['responses'][string] {
+const TABLE_OUT = (field: string) => ({ 'text/csv': { schema: z.string().meta({ description: `RFC 4180: a header of JSON paths, then one record an entry of "${field}".` }) } })
+
+function successOf({ answer, pinned, records, table }: Operation): RouteConfig['responses'][string] {
   if (answer.mediaType !== undefined) {
     return { description: 'The bytes, as an attachment.', content: { [answer.mediaType]: { schema: BYTES } } }
   }
@@ -97,7 +100,7 @@ function successOf({ answer, pinned, records }: Operation): RouteConfig['respons
   return {
     description: SUCCESS[answer.status],
     ...(Object.keys(headers).length > 0 && { headers }),
-    ...(answer.schema && { content: { 'application/json': { schema: answer.schema }, ...(records && RECORDS_OUT) } }),
+    ...(answer.schema && { content: { 'application/json': { schema: answer.schema }, ...(records && RECORDS_OUT), ...(table && TABLE_OUT(table.field)) } }),
   }
 }
 

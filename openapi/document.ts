@@ -26,6 +26,7 @@ export function buildDocument() {
     tags: [
       { name: 'Catalog', description: 'Models, their revisions, and what the importer found.' },
       { name: 'Kinematics', description: 'Answers computed from one revision, named in every reply.' },
+      { name: 'Evidence', description: 'What two revisions differ in at the tip, numbers for the controller to meet, and measured poses held against the model.' },
       { name: 'Keys', description: 'Keys for scripts and gateways. By session only.' },
     ],
   })

@@ -10,6 +10,8 @@ export const ROUTES = {
   getSource: ['GET', '/teams/{team}/models/{model}/revisions/{revision}/source'],
   getFindings: ['GET', '/teams/{team}/models/{model}/revisions/{revision}/findings'],
   transitionRevision: ['POST', '/teams/{team}/models/{model}/revisions/{revision}/transitions'],
+  addReferencePoses: ['POST', '/teams/{team}/models/{model}/revisions/{revision}/reference-poses'],
+  checkReferencePoses: ['POST', '/teams/{team}/models/{model}/revisions/{revision}/reference-poses/check'],
   listKeys: ['GET', '/teams/{team}/keys'],
   createKey: ['POST', '/teams/{team}/keys'],
   getKey: ['GET', '/teams/{team}/keys/{key}'],

@@ -11,23 +11,23 @@ interface RevisionActionsProps {
   /** What this person may do with the revision now. */
   readonly possible: readonly TransitionTo[]
   /** Why a release by this person will be refused. */
-  readonly fourEyes?: string | undefined
+  readonly barred?: string | undefined
 }
 
 /** Order on the page: the act that leads on stands last, and is the one filled with the working colour. */
 const ORDER: readonly TransitionTo[] = ['withdrawn', 'draft', 'in-review', 'released']
 
 /** The changes of status that a person can make here. */
-export function RevisionActions({ path, modelName, possible, fourEyes }: RevisionActionsProps) {
+export function RevisionActions({ path, modelName, possible, barred }: RevisionActionsProps) {
   const acts = ORDER.filter((to) => possible.includes(to))
-  const leading = acts.findLast((to) => (to === 'released' && fourEyes === undefined) || to === 'in-review')
+  const leading = acts.findLast((to) => (to === 'released' && barred === undefined) || to === 'in-review')
   return acts.map((to) => (
     <TransitionDialog
       key={to}
       path={path}
       to={to}
       {...(to === 'withdrawn' ? { confirmName: modelName } : {})}
-      caution={to === 'released' ? fourEyes : undefined}
+      caution={to === 'released' ? barred : undefined}
       trigger={<Button variant={to === leading ? 'primary' : to === 'withdrawn' ? 'danger' : 'plain'}>{TRANSITION_LOOKS[to].label}</Button>}
     />
   ))

@@ -1,3 +1,4 @@
+import { comparisonHref } from '@/components/comparison/comparison-href'
 import { PageHead } from '@/components/shell/page-head'
 import { ButtonLink } from '@/components/ui/button-link'
 import { StatusMark } from '@/components/ui/status-mark'
@@ -11,14 +12,21 @@ interface SheetHeadProps {
   readonly model: Model
   readonly revision: Pick<Revision, 'revision' | 'status'>
   readonly possible: readonly TransitionTo[]
-  readonly fourEyes: string | undefined
+  /** Why a release by this person will be refused. */
+  readonly barred: string | undefined
   readonly mayImport: boolean
 }
 
+/** A revision is held against the one in force, from the earlier to the later; the one in force against its neighbour. */
+function comparedWith({ released, revisions }: Model, revision: number): [from: number, to: number] {
+  const other = released === undefined || released === revision ? (revision > 1 ? revision - 1 : Math.min(revisions, 2)) : released
+  return [Math.min(other, revision), Math.max(other, revision)]
+}
+
 /** Name, status and note of a revision, and what this person can do with it. */
-export function SheetHead({ path, model, revision, possible, fourEyes, mayImport }: SheetHeadProps) {
+export function SheetHead({ path, model, revision, possible, barred, mayImport }: SheetHeadProps) {
   const { team } = path
-  const isBarred = possible.includes('released') && fourEyes !== undefined
+  const isBarred = possible.includes('released') && barred !== undefined
   return (
     <>
       <PageHead
@@ -33,14 +41,15 @@ export function SheetHead({ path, model, revision, possible, fourEyes, mayImport
         actions={
           <>
             <PrintButton />
+            {model.revisions > 1 ? <ButtonLink href={comparisonHref(team, model.slug, ...comparedWith(model, revision.revision))}>Compare</ButtonLink> : null}
             {mayImport ? <ButtonLink href={`/teams/${team}/models/import?model=${model.slug}`}>Import a further revision</ButtonLink> : null}
-            <RevisionActions path={path} modelName={model.name} possible={possible} fourEyes={fourEyes} />
+            <RevisionActions path={path} modelName={model.name} possible={possible} barred={barred} />
           </>
         }
       />
       {isBarred ? (
         <p data-screen-only className="-mt-2 mb-4 text-soft">
-          {fourEyes}
+          {barred}
         </p>
       ) : null}
     </>

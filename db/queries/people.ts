@@ -13,7 +13,7 @@ export async function insertUser(db: Db, user: { email: string; name: string; pa
   return row!
 }
 
-export async function insertTeam(db: Db, team: { slug: string; name: string }) {
+export async function insertTeam(db: Db, team: typeof teams.$inferInsert) {
   const [row] = await db.insert(teams).values(team).returning()
   return row!
 }

@@ -20,6 +20,8 @@ export const teams = pgTable('teams', {
   fourEyes: boolean('four_eyes').notNull().default(true),
   /** A draft is released only through a review. */
   reviewRequired: boolean('review_required').notNull().default(true),
+  /** A revision is released only when its newest reference poses pass. */
+  evidenceRequired: boolean('evidence_required').notNull().default(false),
   createdAt: instant('created_at').notNull().defaultNow(),
 })
 

@@ -8,6 +8,7 @@ export interface Team {
   readonly name: string
   readonly fourEyes: boolean
   readonly reviewRequired: boolean
+  readonly evidenceRequired: boolean
 }
 
 /** A signed-in person, before it is known which team the call is about. */

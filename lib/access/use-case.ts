@@ -52,9 +52,14 @@ export interface Answer<T> {
   readonly etag?: string
   /** Path under /api/v1 of what was made. */
   readonly location?: string
+  /** The JSON of the body, parsed by the operation's schema and written elsewhere; the body itself is left out then. */
+  readonly written?: string
   /** The name under which bytes are saved. */
   readonly fileName?: string
 }
 
 /** One operation's work. */
 export type UseCase<N extends OperationName> = (caller: Caller, ask: Ask<N>) => Promise<Answer<AnswerBody<N>>>
+
+/** One operation's work, which hands back its JSON ready to be sent. */
+export type WritingUseCase<N extends OperationName> = (caller: Caller, ask: Ask<N>) => Promise<Answer<undefined> & { readonly written: string }>

@@ -1,10 +1,5 @@
-import type { UseCase } from '@/lib/access/use-case'
-import { presentStructure } from './present-structure'
-import { readUpload } from './read-upload'
+import type { WritingUseCase } from '@/lib/access/use-case'
+import { readCheck } from './reader-pool'
 
 /** What the importer has to say about a file, and what it would store. Stores nothing. */
-export const checkImport: UseCase<'checkImport'> = async (_caller, { file }) => {
-  const { findings, read, sourceDigest } = readUpload(file)
-  const structure = read === null ? {} : { structure: presentStructure(read.description, { fingerprint: read.fingerprint, sourceDigest }) }
-  return { body: { findings: [...findings], ...structure } }
-}
+export const checkImport: WritingUseCase<'checkImport'> = async (_caller, { file }) => ({ body: undefined, written: await readCheck(file.bytes) })

@@ -28,7 +28,7 @@ async function insertUnderSlug(db: Db, teamId: string, name: string, slug: strin
 
 /** Imports a file as revision 1 of a new model. */
 export const createModel: UseCase<'createModel'> = async (caller, { form, file }) => {
-  const upload = acceptUpload(file)
+  const upload = await acceptUpload(file)
   const db = await getDb()
   const now = new Date()
   const { slug } = await db.transaction(async (inside) => {

@@ -9,7 +9,7 @@ import { storeRevision } from './store-revision'
 
 /** Imports a file as a further revision of a model. */
 export const createRevision: UseCase<'createRevision'> = async (caller, { at, form, file }) => {
-  const upload = acceptUpload(file)
+  const upload = await acceptUpload(file)
   const { id: modelId } = at.model.model
   const db = await getDb()
   const number = await db.transaction(async (inside) => {

@@ -1,5 +1,6 @@
 import { type Db, getDb } from '@/db/client'
 import { lockModel, setModel } from '@/db/queries/models'
+import { findNewestVerdict } from '@/db/queries/reference-poses'
 import { appendTransition, findRevision, listTransitions, type RevisionRow } from '@/db/queries/revisions'
 import { type Caller, callerName } from '@/lib/access/caller'
 import { includesRole } from '@/lib/access/roles'
@@ -19,6 +20,14 @@ function checkTransition(caller: Caller, from: Status, to: Status): void {
   if (skipsReview(from, to) && caller.team.reviewRequired) {
     fail('transition-refused', 'This team releases only after a review: submit the draft for review first.')
   }
+}
+
+/** Fails with evidence-missing where the team demands that the newest reference poses pass, and they do not. */
+async function checkEvidence(db: Db, caller: Caller, revision: RevisionRow): Promise<void> {
+  if (!caller.team.evidenceRequired) return
+  const newest = await findNewestVerdict(db, revision.id)
+  if (newest === null) fail('evidence-missing', 'This team releases only what was measured: store reference poses with this revision first.')
+  if (!newest.passed) fail('evidence-missing', `The newest reference poses of this revision, number ${newest.number}, do not pass.`)
 }
 
 /** Fails with four-eyes when the releaser imported or last submitted the revision. */
@@ -42,6 +51,7 @@ export const transitionRevision: UseCase<'transitionRevision'> = async (caller, 
     checkTransition(caller, revision.status, body.to)
     const act = { byName: callerName(caller), byUser: caller.userId, at: now }
     if (body.to === 'released') {
+      await checkEvidence(inside, caller, revision)
       await checkFourEyes(inside, caller, revision)
       const former = model.released === null ? null : await findRevision(inside, modelId, model.released)
       if (former !== null) {

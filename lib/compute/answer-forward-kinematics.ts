@@ -2,28 +2,16 @@ import type { z } from 'zod'
 import type { UseCase } from '@/lib/access/use-case'
 import type { ForwardKinematicsResult } from '@/lib/contract/kinematic-answers'
 import { FORWARD_KINEMATICS_FIELDS } from '@/lib/contract/kinematic-questions'
-import type { Pose } from '@/lib/contract/kinematic-quantities'
 import { fail } from '@/lib/errors'
 import type { Chain } from '@/lib/kinematics/chain'
 import { createWorkspace } from '@/lib/kinematics/create-workspace'
 import { forwardKinematics } from '@/lib/kinematics/forward-kinematics'
 import { listViolations } from '@/lib/kinematics/within-limits'
-import { quaternionOf } from '@/lib/math/quaternion'
-import { positionOf } from '@/lib/math/rigid-transform'
 import { begin, taskOf } from './begin'
 import { includedFields, inOrder, pick } from './included'
 import { chainOf, loadRevision } from './load-chain'
-import { POSITION_KINDS, type SiWriter } from './si'
+import { presentPose } from './present-pose'
 import { withRecords } from './with-records'
-
-/** A transform of 12 numbers (m) as a pose of the answer. */
-function presentPose(transform: ArrayLike<number>, write: SiWriter, withMatrix: boolean): Pose {
-  const position = write.list(positionOf(transform), POSITION_KINDS)
-  const pose = { position, quaternion: quaternionOf(transform) }
-  if (!withMatrix) return pose
-  const row = (i: number) => [transform[4 * i]!, transform[4 * i + 1]!, transform[4 * i + 2]!, position[i]!]
-  return { ...pose, matrix: [row(0), row(1), row(2), [0, 0, 0, 1]] }
-}
 
 /** A link beside the tip: its own chain, and where each of its joints stands in the main one. Fails with link-not-determined. */
 function followLink(main: Chain, link: Chain, pointer: string) {

@@ -1,7 +1,7 @@
 import { getDb } from '@/db/client'
 import { getDescription, getFindingRows } from '@/db/queries/revisions'
 import type { Caller } from '@/lib/access/caller'
-import type { Located } from '@/lib/access/locate'
+import { type Located, locateRevision } from '@/lib/access/locate'
 import { fail } from '@/lib/errors'
 import type { Chain } from '@/lib/kinematics/chain'
 import { compileChain } from '@/lib/urdf/compile-chain'
@@ -59,4 +59,10 @@ export function chainOf({ description, chains }: Loaded, choice: ChainChoice): C
 /** A chain of a revision, compiled: plain data, fit to be handed to a component. */
 export async function loadChain(_caller: Caller, at: Pick<Located, 'revision'>, choice: ChainChoice = {}): Promise<Chain> {
   return chainOf(await loadRevision(at.revision.id), choice)
+}
+
+/** A chain of the revision of this number, compiled. Fails with revision-not-found. */
+export async function loadChainOf(caller: Caller, at: Pick<Located, 'model'>, number: number, choice: ChainChoice): Promise<Chain> {
+  const revision = await locateRevision(await getDb(), at.model, String(number))
+  return loadChain(caller, { revision }, choice)
 }

@@ -12,7 +12,8 @@ export const jointKinds = (chain: Chain): Kind[] => chain.joints.map(({ type }) 
 export const TWIST_KINDS: readonly Kind[] = ['length', 'length', 'length', 'angle', 'angle', 'angle']
 export const POSITION_KINDS: readonly Kind[] = ['length', 'length', 'length']
 
-const toSi = (value: number, kind: Kind | null, units: Units): number => {
+/** A number of these units in SI; of no kind: as it is. */
+export const toSi = (value: number, kind: Kind | null, units: Units): number => {
   if (kind === 'length' && units.length === 'mm') return mFromMm(value)
   if (kind === 'angle' && units.angle === 'deg') return radFromDeg(value)
   return value

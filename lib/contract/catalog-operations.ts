@@ -1,5 +1,5 @@
 import { z } from 'zod'
-import { Finding, Structure } from './description'
+import { CheckedImport, Finding } from './description'
 import { Model, ModelEdit, NewModelForm, NewRevisionForm, Revision, RevisionSummary, TransitionQuestion } from './model'
 import { operation } from './operation'
 import { listOf, Paging, Status, wholeNumber } from './scalars'
@@ -42,7 +42,7 @@ export const CATALOG_OPERATIONS = {
     summary: 'Read a file without storing it',
     description: 'Answers what the importer has to say, whatever the file holds.',
     form: z.strictObject({}),
-    answer: { status: 200, schema: z.strictObject({ findings: z.array(Finding), structure: Structure.optional() }) },
+    answer: { status: 200, schema: CheckedImport },
     errors: [],
   }),
   getModel: operation({
@@ -130,7 +130,7 @@ export const CATALOG_OPERATIONS = {
     description: 'Releasing supersedes the revision that was in force. Withdrawing revives nothing.',
     body: TransitionQuestion,
     answer: { status: 200, schema: Revision },
-    errors: ['transition-refused', 'four-eyes'],
+    errors: ['transition-refused', 'evidence-missing', 'four-eyes'],
     example: { to: 'in-review', comment: 'Checked against the drawing.' },
   }),
 } as const

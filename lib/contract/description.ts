@@ -72,3 +72,6 @@ export const structureFields = {
 
 export const Structure = z.strictObject(structureFields).meta({ id: 'Structure' })
 export type Structure = z.infer<typeof Structure>
+
+/** What the check of an import answers. structure: left out when a finding is an error. */
+export const CheckedImport = z.strictObject({ findings: z.array(Finding), structure: Structure.optional() })

@@ -10,7 +10,7 @@ export interface Operation {
   readonly method: Method
   /** Under /api/v1, with {parameters}. */
   readonly path: string
-  readonly tag: 'Catalog' | 'Kinematics' | 'Keys'
+  readonly tag: 'Catalog' | 'Kinematics' | 'Evidence' | 'Keys'
   readonly summary: string
   readonly description?: string
   readonly query?: z.ZodObject
@@ -28,6 +28,8 @@ export interface Operation {
   readonly item?: z.ZodObject
   /** Takes binary records, and answers CSV and binary records besides JSON: one for each of the `results`. */
   readonly records?: RecordForm
+  /** The list in the answer that is also given as text/csv, by Accept or `?format=csv`, and the schema of its entries. */
+  readonly table?: { readonly field: string; readonly entry: z.ZodObject }
   /** Problems beyond those that follow from the rest of the declaration (see common-problems.ts). */
   readonly errors: readonly ProblemCode[]
   /** Honours If-Match: "<fingerprint>" and answers Model-Fingerprint. */

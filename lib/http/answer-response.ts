@@ -20,8 +20,19 @@ const quoted = (tag: string) => `"${tag}"`
 
 const WRITERS: Readonly<Record<RecordMediaType, (series: Series<unknown>, envelope: Envelope, item: z.ZodObject) => ResultWriter>> = {
   'application/json': (_series, envelope) => jsonWriter(envelope),
-  'text/csv': (series, _envelope, item) => csvWriter(series, item),
+  'text/csv': (series, _envelope, item) => csvWriter(series.fields, item),
   'application/octet-stream': (series, { chain }) => binaryWriter(series, chain.joints),
+}
+
+/** The list of an answer that is offered as a table, parsed by the declared schema first. */
+function* writeTable({ answer, table }: Operation, body: unknown): Generator<void, Written> {
+  const parsed = answer.schema!.parse(body) as Readonly<Record<string, readonly Readonly<Record<string, unknown>>[]>>
+  const writer = csvWriter([], table!.entry)
+  for (const entry of parsed[table!.field]!) {
+    writer.take(entry)
+    yield
+  }
+  return yield* writer.finish()
 }
 
 /** Has the results worked out and writes each of them, parsed by its schema first, so that a field nobody declared never leaves. All is
@@ -41,7 +52,8 @@ function* writeResults(operation: Operation, item: z.ZodObject, body: object, me
 
 /** The answer in the format asked for. */
 async function write(operation: Operation, body: unknown, mediaType: string): Promise<Written> {
-  const { answer, item } = operation
+  const { answer, item, table } = operation
+  if (table !== undefined && mediaType === CSV_TYPE) return finishInSlices(writeTable(operation, body))
   if (item !== undefined) return finishInSlices(writeResults(operation, item, body as object, mediaType as RecordMediaType))
   if (answer.schema === undefined) return { headers: {}, chunks: body === undefined ? [] : [body as Uint8Array] }
   return { headers: {}, chunks: [JSON.stringify(answer.schema.parse(body))] }
@@ -106,7 +118,7 @@ function digestOf(chunks: Written['chunks']): string {
 export async function answerResponse(operation: Operation, answer: Answer<unknown>, context: AnswerContext): Promise<Response> {
   const headers = new Headers({ 'x-request-id': context.request.id, 'x-content-type-options': 'nosniff', 'cache-control': 'no-store' })
   const { status } = operation.answer
-  const written = await write(operation, answer.body, context.mediaType)
+  const written = answer.written === undefined ? await write(operation, answer.body, context.mediaType) : { headers: {}, chunks: [answer.written] }
 
   let etag = answer.etag
   if (operation.conditional) {
@@ -115,18 +127,21 @@ export async function answerResponse(operation: Operation, answer: Answer<unknow
   }
   if (etag !== undefined) headers.set('etag', quoted(etag))
   if (answer.location !== undefined) headers.set('location', `/api/v1${answer.location}`)
+  if (operation.records !== undefined || operation.table !== undefined) headers.set('vary', 'Accept')
   if (operation.pinned) {
     headers.set('model-fingerprint', context.at.revision!.fingerprint)
     headers.append('link', CAUTIONS)
   }
-  if (operation.records !== undefined) headers.set('vary', 'Accept')
   const cursor = (answer.body as { nextCursor?: string } | undefined)?.nextCursor
   if (cursor !== undefined) headers.append('link', nextLink(context.request.path, context.search, cursor))
   if (operation.conditional && isKnown(etag!, context.ifNoneMatch)) return new Response(null, { status: 304, headers })
   if (status === 204) return new Response(null, { status, headers })
   headers.set('content-type', context.mediaType === CSV_TYPE ? `${CSV_TYPE}; charset=utf-8; header=present` : context.mediaType)
   for (const [name, value] of Object.entries(written.headers)) headers.set(name, value)
-  if (operation.answer.mediaType === undefined) return new Response(streamOf(written.chunks), { status, headers })
+  if (operation.answer.mediaType === undefined) {
+    if (answer.fileName !== undefined) headers.set('content-disposition', attachment(`${answer.fileName}.${context.mediaType === CSV_TYPE ? 'csv' : 'json'}`))
+    return new Response(streamOf(written.chunks), { status, headers })
+  }
   headers.set('content-disposition', attachment(answer.fileName ?? 'file'))
   headers.set('content-security-policy', "sandbox; default-src 'none'")
   return new Response(answer.body as BodyInit, { status, headers })

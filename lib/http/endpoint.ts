@@ -13,7 +13,7 @@ import { answerResponse, CAUTIONS } from './answer-response'
 import { authenticate, checkOrigin } from './authenticate'
 import { parsePart, pointerOf } from './faults'
 import { checkIfMatch } from './if-match'
-import { JSON_TYPE, RECORD_MEDIA_TYPES, RECORD_TYPE } from './media-types'
+import { CSV_TYPE, JSON_TYPE, RECORD_MEDIA_TYPES, RECORD_TYPE } from './media-types'
 import { parseBodyInSteps } from './parse-body'
 import { problemResponse } from './problem-response'
 import { discardBody, readContentType, readForm, readJson, readRecordBytes } from './read-body'
@@ -51,8 +51,12 @@ async function readParts(operation: Operation, request: NextRequest) {
   return { query: parseQuery(), body: await finishInSlices(parseBodyInSteps(operation.body, body)) }
 }
 
-/** The formats that the operation answers in. */
-const offered = ({ answer, records }: Operation): readonly [string, ...string[]] => (records === undefined ? [answer.mediaType ?? JSON_TYPE] : RECORD_MEDIA_TYPES)
+/** The formats that the operation answers in, the usual one first. */
+const offeredBy = ({ answer, records, table }: Operation): readonly [string, ...string[]] =>
+  records !== undefined ? RECORD_MEDIA_TYPES : [answer.mediaType ?? JSON_TYPE, ...(table === undefined ? [] : [CSV_TYPE])]
+
+/** Of a table the query may say what a browser's link cannot: `?format=`. */
+const FORMATS: Readonly<Record<string, string>> = { json: JSON_TYPE, csv: CSV_TYPE }
 
 /** A use-case as a route handler. The order of checks is the contract's:
  *  401, 404, 403, 406, 415, 413, 400, 422, 428, 412, and what the use-case itself refuses; that binary records have the length
@@ -74,10 +78,12 @@ export function endpoint<N extends OperationName>(name: N, useCase: UseCase<N>):
       await passTurn()
       checkOrigin(who, operation.method, request.headers)
       permit(caller, name)
-      const mediaType = chooseMediaType(request.headers, offered(operation))
+      const accepted = chooseMediaType(request.headers, offeredBy(operation))
       const parts = await readParts(operation, request)
       checkIfMatch(operation, at, request.headers)
       await passTurn()
+      const { format } = (parts.query ?? {}) as { format?: string }
+      const mediaType = operation.table !== undefined && format !== undefined ? FORMATS[format]! : accepted
       const answer: Answer<unknown> = await useCase(caller, { at, ...parts } as Ask<N>)
       response = await answerResponse(operation, answer, {
         request: mark,

@@ -1,5 +1,4 @@
 import type { z } from 'zod'
-import type { Series } from '@/lib/access/use-case'
 import { bare } from './bare-schema'
 import type { ResultWriter } from './result-writer'
 
@@ -67,11 +66,11 @@ function hasSeen(fields: ReadonlyMap<string, Shape>): boolean {
 }
 
 /** Writes results as CSV (RFC 4180): a header, then one record each. Columns are named by the path in the JSON result and stand in the order
- *  of the schema, lists from their first entry on: all that some result has, and at least one for each field asked for. item: the
+ *  of the schema, lists from their first entry on: all that some result has, and at least one for each of the `fields`. item: the
  *  schema of a result. */
-export function csvWriter(series: Series<unknown>, item: z.ZodObject): ResultWriter {
+export function csvWriter(fields: readonly string[], item: z.ZodObject): ResultWriter {
   const shape = shapeOf(item)
-  for (const field of series.fields) shape.fields!.get(field)!.seen = true
+  for (const field of fields) shape.fields!.get(field)!.seen = true
   const kept: unknown[] = []
   return {
     take(result) {

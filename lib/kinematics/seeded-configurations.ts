@@ -6,13 +6,15 @@ const HALF_SPAN = { revolute: Math.PI, continuous: Math.PI, prismatic: 1 } as co
 /** `count` configurations spread over the joint ranges, the same for the same chain and seed on every machine.
  *  A joint without bounds takes ±pi (rotary) or ±1 m (prismatic); with one bound, as wide a span from that bound on. */
 export function seededConfigurations(chain: Chain, count: number, seed = 1): Float64Array[] {
+  const next = configurationSource(chain.joints, seed)
+  return Array.from({ length: count }, next)
+}
+
+/** The configurations of seededConfigurations one by one, for work that is done in slices. */
+export function configurationSource(joints: readonly ChainJoint[], seed = 1): () => Float64Array {
   const random = numbers(seed)
-  return Array.from({ length: count }, () =>
-    Float64Array.from(chain.joints, (joint) => {
-      const [from, to] = rangeOf(joint)
-      return from + (to - from) * random()
-    }),
-  )
+  const ranges = joints.map(rangeOf)
+  return () => Float64Array.from(ranges, ([from, to]) => from + (to - from) * random())
 }
 
 /** The range of a joint; where a bound is missing, the one that seededConfigurations takes. */

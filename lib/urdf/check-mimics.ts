@@ -2,6 +2,7 @@ import { findLoops } from '@/lib/urdf/find-loops'
 import { moves, type DraftJoint } from '@/lib/urdf/read-joint'
 import type { Report } from '@/lib/urdf/report'
 import { createSimilarName } from '@/lib/urdf/similar-name'
+import { leavesRange } from '@/lib/urdf/leaves-range'
 import { listed, quoted } from '@/lib/urdf/wording'
 
 interface Follows {
@@ -41,14 +42,18 @@ function warnOfLeaders(report: Report, joints: ReadonlyMap<string, DraftJoint>, 
     if (known) known.push(child)
     else followers.set(parent, [child])
   }
-  const settled = [...joints.keys()].filter((name) => into.get(name)!.length === 0).map((name) => ({ name, leader: name }))
-  for (const { name, leader } of settled) {
+  const settled = [...joints.keys()].filter((name) => into.get(name)!.length === 0).map((name) => ({ name, leader: name, multiplier: 1, offset: 0 }))
+  for (const { name, leader, ...drive } of settled) {
     for (const follower of followers.get(name) ?? []) {
-      settled.push({ name: follower, leader })
-      const { type } = joints.get(leader)!
-      if (type === null || moves(type)) continue
-      const { label, mimic } = joints.get(follower)!
-      if (type === 'fixed') {
+      const { label, mimic, limits } = joints.get(follower)!
+      const multiplier = mimic!.multiplier * drive.multiplier
+      const offset = mimic!.multiplier * drive.offset + mimic!.offset
+      settled.push({ name: follower, leader, multiplier, offset })
+      const { type, limits: range } = joints.get(leader)!
+      if (type === null || moves(type)) {
+        const leaves = range && limits && leavesRange(range, limits, multiplier, offset)
+        if (leaves) report.add('mimic-leaves-range', mimic!.joint.valueAt, `Following ${quoted(leader)} over its range, the joint would come to ${leaves}.`, { element: label })
+      } else if (type === 'fixed') {
         report.add('mimic-of-fixed', mimic!.joint.valueAt, `The joint follows ${quoted(leader)}, which is fixed; it is held at its offset.`, { element: label })
       } else {
         report.add('floating-or-planar', mimic!.joint.valueAt, `The joint follows ${quoted(leader)}, which is ${type}: chains that pass through it are not computed.`, { element: label })

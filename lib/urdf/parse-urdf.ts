@@ -12,11 +12,21 @@ export interface ParsedUrdf {
   readonly findings: Finding[]
 }
 
+/** A larger file is refused. */
+const MOST_BYTES = 8 * 1024 * 1024
+
+/** What came with a file. */
+export interface Surroundings {
+  /** The paths in the archive that the file came in, with '/' between their parts: its meshes are looked for there. */
+  readonly files?: readonly string[]
+}
+
 /** Reads a URDF file from its bytes. Trusts nothing and throws nothing, whatever the bytes are; time is linear in their number.
  *  A fault of the text ends the reading; faults of the model are all found in one pass. */
-export function parseUrdf(bytes: Uint8Array): ParsedUrdf {
+export function parseUrdf(bytes: Uint8Array, { files }: Surroundings = {}): ParsedUrdf {
   const kind = findForeignKind(bytes)
   if (kind) return refusal('', 'not-xml', `The file is ${kind}.`)
+  if (bytes.length > MOST_BYTES) return refusal('', 'too-large', `The file has ${bytes.length} bytes; at most ${MOST_BYTES} are read.`)
   const decoded = decodeText(bytes)
   if ('message' in decoded) return refusal(decoded.read, 'encoding-unsupported', decoded.message)
   const { text } = decoded
@@ -26,12 +36,12 @@ export function parseUrdf(bytes: Uint8Array): ParsedUrdf {
 
   const report = createReport(text)
   const scanned = scanXml(text, report)
-  const description = scanned && readRobot(text, readTree(scanned), report)
+  const description = scanned && readRobot(text, readTree(scanned), report, files ?? null)
   return { description, findings: report.findings() }
 }
 
 /** read: the text up to the place of the fault. */
-function refusal(read: string, rule: 'not-xml' | 'encoding-unsupported', message: string): ParsedUrdf {
+function refusal(read: string, rule: 'not-xml' | 'encoding-unsupported' | 'too-large', message: string): ParsedUrdf {
   const report = createReport(read)
   report.add(rule, read.length, message)
   return { description: null, findings: report.findings() }

@@ -1,7 +1,7 @@
 import { norm } from '@/lib/math/norm'
 import type { JointType, Triple } from '@/lib/urdf/description'
-import type { XmlElement } from '@/lib/urdf/read-tree'
-import { attributesOf, LARGEST, numbersOf, type Reading } from '@/lib/urdf/read-value'
+import { LARGEST, numbersOf, type ReadElement } from '@/lib/urdf/read-value'
+import type { Reading } from '@/lib/urdf/reading'
 import { quoted } from '@/lib/urdf/wording'
 
 const NO_AXIS: Triple = [0, 0, 0]
@@ -12,13 +12,13 @@ const MENTIONED = 1e-6
 
 /** The unit axis of a joint, each component rounded to 1e-12 so that two ways of writing one direction come out the same;
  *  zero for a type that has none. What cannot be read, or is changed, is reported. jointAt: offset of the joint's tag. */
-export function readAxis({ text, report }: Reading, element: XmlElement | undefined, type: JointType, jointAt: number, label: string): Triple {
+export function readAxis({ report }: Reading, element: ReadElement | undefined, type: JointType, jointAt: number, label: string): Triple {
   if (type === 'fixed' || type === 'floating') return NO_AXIS
   if (!element) {
     if (type !== 'planar') report.add('axis-defaulted', jointAt, 'No axis is given; the x axis of the joint frame is used.', { element: label })
     return DEFAULT_AXIS
   }
-  const written = attributesOf(text, element).get('xyz')
+  const written = element.attributes.get('xyz')
   if (!written) {
     report.add('axis-zero', element.at, 'The axis has no xyz. Some programs take x, others no direction at all.', { element: label })
     return DEFAULT_AXIS

@@ -1,11 +1,14 @@
 import type { DescribedJoint, JointType, Origin, Triple } from '@/lib/urdf/description'
+import { checkAttributes } from '@/lib/urdf/check-attributes'
+import { mentionMacros } from '@/lib/urdf/mention-macros'
 import { readAxis } from '@/lib/urdf/read-axis'
 import { readLimit, type Limits } from '@/lib/urdf/read-limit'
 import { readName } from '@/lib/urdf/read-name'
 import { readOrigin } from '@/lib/urdf/read-origin'
 import type { Attribute } from '@/lib/urdf/read-tag'
 import type { XmlElement } from '@/lib/urdf/read-tree'
-import { attributesOf, isUnexpanded, LARGEST, numberOf, type Attributes, type Reading } from '@/lib/urdf/read-value'
+import { attributesOf, isUnexpanded, LARGEST, numberOf, type Attributes, type ReadElement } from '@/lib/urdf/read-value'
+import type { Reading } from '@/lib/urdf/reading'
 import { listed, quoted } from '@/lib/urdf/wording'
 
 const TYPES: readonly JointType[] = ['revolute', 'continuous', 'prismatic', 'fixed', 'floating', 'planar']
@@ -23,6 +26,8 @@ export interface DraftJoint {
   readonly axis: Triple
   readonly limits: Limits | null
   readonly mimic: { readonly joint: Attribute; readonly multiplier: number; readonly offset: number } | null
+  /** Where the values that may be in a wrong unit are written. */
+  readonly places: { readonly xyz: number | undefined; readonly rpy: number | undefined; readonly bound: number | undefined }
 }
 
 export const moves = (type: JointType | null): boolean => type === 'revolute' || type === 'continuous' || type === 'prismatic'
@@ -33,6 +38,7 @@ export function readJoint(reading: Reading, element: XmlElement): DraftJoint {
   const attributes = attributesOf(text, element)
   const { name, label } = readName(report, attributes, element, 'joint')
   const parts = uniqueParts(reading, element, label)
+  checkAttributes(report, element.name, attributes, label)
   const type = readType(reading, attributes, element, label)
   return {
     at: element.at,
@@ -45,6 +51,11 @@ export function readJoint(reading: Reading, element: XmlElement): DraftJoint {
     axis: readAxis(reading, parts.get('axis'), type ?? 'fixed', element.at, label),
     limits: type && readLimit(reading, parts.get('limit'), type, element.at, label),
     mimic: moves(type) ? readMimic(reading, parts.get('mimic'), label) : null,
+    places: {
+      xyz: parts.get('origin')?.attributes.get('xyz')?.valueAt,
+      rpy: parts.get('origin')?.attributes.get('rpy')?.valueAt,
+      bound: (parts.get('limit')?.attributes.get('lower') ?? parts.get('limit')?.attributes.get('upper'))?.valueAt,
+    },
   }
 }
 
@@ -65,13 +76,20 @@ export function describeJoint({ name, type, parent, child, origin, axis, limits,
 const PARTS = ['parent', 'child', 'origin', 'axis', 'limit', 'mimic']
 
 /** The first of each part; further ones, and macros among the parts, are reported. */
-function uniqueParts({ report }: Reading, joint: XmlElement, label: string): ReadonlyMap<string, XmlElement> {
-  const parts = new Map<string, XmlElement>()
-  for (const part of joint.children) {
-    if (part.name.startsWith('xacro:')) report.add('xacro-unexpanded', part.at, `<${part.name}> still waits for xacro to be expanded.`, { element: label })
-    if (!PARTS.includes(part.name)) continue
-    if (!parts.has(part.name)) parts.set(part.name, part)
-    else report.add('joint-incomplete', part.at, `The joint has a second <${part.name}>.`, { element: label })
+function uniqueParts(reading: Reading, joint: XmlElement, label: string): ReadonlyMap<string, ReadElement> {
+  const { text, report, unused } = reading
+  for (const { name, at } of joint.children) {
+    if (name.startsWith('xacro:')) report.add('xacro-unexpanded', at, `<${name}> still waits for xacro to be expanded.`, { element: label })
+  }
+  const parts = new Map<string, ReadElement>()
+  for (const part of unused.knownChildren('joint', joint, label)) {
+    if (!PARTS.includes(part.name)) mentionMacros(reading, [part], label)
+    else if (parts.has(part.name)) report.add('joint-incomplete', part.at, `The joint has a second <${part.name}>.`, { element: label })
+    else {
+      const attributes = attributesOf(text, part)
+      checkAttributes(report, part.name, attributes, label)
+      parts.set(part.name, { at: part.at, attributes })
+    }
   }
   return parts
 }
@@ -94,13 +112,13 @@ function readType({ report }: Reading, attributes: Attributes, joint: XmlElement
   return type
 }
 
-function readEnd({ text, report }: Reading, parts: ReadonlyMap<string, XmlElement>, which: 'parent' | 'child', joint: XmlElement, label: string): Attribute | null {
+function readEnd({ report }: Reading, parts: ReadonlyMap<string, ReadElement>, which: 'parent' | 'child', joint: XmlElement, label: string): Attribute | null {
   const element = parts.get(which)
   if (!element) {
     report.add('joint-incomplete', joint.at, `The joint has no <${which}>.`, { element: label })
     return null
   }
-  const link = attributesOf(text, element).get('link')
+  const link = element.attributes.get('link')
   if (!link || link.value.trim() === '') {
     report.add('joint-incomplete', element.at, `The <${which}> of the joint names no link.`, { element: label })
     return null
@@ -108,9 +126,9 @@ function readEnd({ text, report }: Reading, parts: ReadonlyMap<string, XmlElemen
   return isUnexpanded(report, link, label) ? null : link
 }
 
-function readMimic({ text, report }: Reading, element: XmlElement | undefined, label: string): DraftJoint['mimic'] {
+function readMimic({ report }: Reading, element: ReadElement | undefined, label: string): DraftJoint['mimic'] {
   if (!element) return null
-  const attributes = attributesOf(text, element)
+  const { attributes } = element
   const multiplier = numberOf(report, attributes.get('multiplier'), 1, LARGEST.geometry, label) ?? 1
   const offset = numberOf(report, attributes.get('offset'), 0, LARGEST.geometry, label) ?? 0
   const joint = attributes.get('joint')

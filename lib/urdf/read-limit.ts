@@ -1,7 +1,8 @@
 import type { DescribedJoint, JointType } from '@/lib/urdf/description'
 import type { Attribute } from '@/lib/urdf/read-tag'
-import type { XmlElement } from '@/lib/urdf/read-tree'
-import { attributesOf, LARGEST, numberOf, type Attributes, type Reading } from '@/lib/urdf/read-value'
+import { LARGEST, numberOf, type Attributes, type ReadElement } from '@/lib/urdf/read-value'
+import type { Reading } from '@/lib/urdf/reading'
+import { noteTurns } from '@/lib/urdf/note-turns'
 import { quoted } from '@/lib/urdf/wording'
 
 export type Limits = Pick<DescribedJoint, 'lower' | 'upper' | 'rate' | 'effort' | 'acceleration' | 'deceleration' | 'jerk'>
@@ -9,17 +10,17 @@ export type Limits = Pick<DescribedJoint, 'lower' | 'upper' | 'rate' | 'effort' 
 const NONE: Limits = { lower: null, upper: null, rate: null, effort: null, acceleration: null, deceleration: null, jerk: null }
 
 /** The limits of a joint after defaults; none for a type that has none. jointAt: offset of the joint's tag. */
-export function readLimit(reading: Reading, element: XmlElement | undefined, type: JointType, jointAt: number, label: string): Limits {
+export function readLimit(reading: Reading, element: ReadElement | undefined, type: JointType, jointAt: number, label: string): Limits {
   if (type === 'fixed' || type === 'floating' || type === 'planar') return NONE
-  const { text, report, version } = reading
+  const { report, version } = reading
   if (!element && type !== 'continuous' && version !== '1.2') {
     report.add('limit-missing', jointAt, `The joint is ${type} and has no <limit>, which URDF ${version} demands.`, { element: label })
     return NONE
   }
-  const attributes: Attributes = element ? attributesOf(text, element) : new Map()
+  const attributes: Attributes = element?.attributes ?? new Map()
   const at = element?.at ?? jointAt
   const positive = (name: string, required: boolean): number | null => readPositive(reading, attributes.get(name), name, required, at, label)
-  const bounds = type === 'continuous' ? ignoreBounds(reading, attributes, label) : readBounds(reading, attributes, at, label)
+  const bounds = type === 'continuous' ? ignoreBounds(reading, attributes, label) : readBounds(reading, attributes, type, at, label)
   return {
     ...bounds,
     rate: positive('velocity', true),
@@ -39,7 +40,7 @@ function ignoreBounds({ report }: Reading, attributes: Attributes, label: string
   return { lower: null, upper: null }
 }
 
-function readBounds({ report, version }: Reading, attributes: Attributes, at: number, label: string): Pick<Limits, 'lower' | 'upper'> {
+function readBounds({ report, version }: Reading, attributes: Attributes, type: JointType, at: number, label: string): Pick<Limits, 'lower' | 'upper'> {
   const standing = version === '1.2' ? null : 0
   const names = ['lower', 'upper'] as const
   const [lower, upper] = names.map((name) => numberOf(report, attributes.get(name), standing, LARGEST.limit, label))
@@ -53,6 +54,7 @@ function readBounds({ report, version }: Reading, attributes: Attributes, at: nu
   if (given && typeof lower === 'number' && typeof upper === 'number') {
     if (lower > upper) report.add('limit-inverted', given.valueAt, `The lower limit ${lower} is above the upper limit ${upper}.`, { element: label })
     if (lower === upper) report.add('range-empty', given.valueAt, `The lower and the upper limit are both ${lower}.`, { element: label })
+    if (type === 'revolute') noteTurns(report, attributes, lower, upper, label)
   }
   return { lower: lower ?? null, upper: upper ?? null }
 }

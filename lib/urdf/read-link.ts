@@ -1,7 +1,11 @@
+import { checkInertia } from '@/lib/urdf/check-inertia'
+import { mentionMacros } from '@/lib/urdf/mention-macros'
+import { readName } from '@/lib/urdf/read-name'
+import { readShape } from '@/lib/urdf/read-shape'
 import type { Attribute } from '@/lib/urdf/read-tag'
 import type { XmlElement } from '@/lib/urdf/read-tree'
-import { readName } from '@/lib/urdf/read-name'
-import { attributesOf, type Reading } from '@/lib/urdf/read-value'
+import { attributesOf } from '@/lib/urdf/read-value'
+import type { Reading } from '@/lib/urdf/reading'
 
 /** A link as read. meshes: the filename of each mesh in its visuals and collisions, in file order. */
 export interface DraftLink {
@@ -11,18 +15,16 @@ export interface DraftLink {
   readonly meshes: readonly Attribute[]
 }
 
-/** Reads a <link>: its name and its meshes. Inertia, colours and shapes do not enter the computation. */
-export function readLink({ text, report }: Reading, element: XmlElement): DraftLink {
+/** Reads a <link>: its name and its meshes. Inertia, colours and shapes do not enter the computation, but what is odd about them is
+ *  worth a note. */
+export function readLink(reading: Reading, element: XmlElement): DraftLink {
+  const { text, report, unused } = reading
+  const { name, label } = readName(report, attributesOf(text, element), element, 'link')
   const meshes: Attribute[] = []
-  for (const shape of element.children) {
-    if (shape.name !== 'visual' && shape.name !== 'collision') continue
-    for (const geometry of shape.children) {
-      if (geometry.name !== 'geometry') continue
-      for (const mesh of geometry.children) {
-        const filename = mesh.name === 'mesh' && attributesOf(text, mesh).get('filename')
-        if (filename) meshes.push(filename)
-      }
-    }
+  for (const part of unused.knownChildren('link', element, label)) {
+    if (part.name === 'inertial') checkInertia(reading, part, label)
+    else meshes.push(...readShape(reading, part, label))
   }
-  return { at: element.at, ...readName(report, attributesOf(text, element), element, 'link'), meshes }
+  mentionMacros(reading, element.children, label)
+  return { at: element.at, label, name, meshes }
 }

@@ -1,7 +1,7 @@
 import { norm } from '@/lib/math/norm'
 import type { Origin, Quadruple, Triple } from '@/lib/urdf/description'
-import type { XmlElement } from '@/lib/urdf/read-tree'
-import { attributesOf, LARGEST, numbersOf, type Reading } from '@/lib/urdf/read-value'
+import { LARGEST, numbersOf, type ReadElement } from '@/lib/urdf/read-value'
+import type { Reading } from '@/lib/urdf/reading'
 import { quoted } from '@/lib/urdf/wording'
 
 const ZERO: Triple = [0, 0, 0]
@@ -10,9 +10,9 @@ const REFUSED = 1e-3
 const MENTIONED = 1e-6
 
 /** The origin of a joint: identity where the element or a part of it is left out. What cannot be read is reported. */
-export function readOrigin({ text, report, version }: Reading, element: XmlElement | undefined, label: string): Origin {
+export function readOrigin({ report, version }: Reading, element: ReadElement | undefined, label: string): Origin {
   if (!element) return { xyz: ZERO, rpy: ZERO }
-  const attributes = attributesOf(text, element)
+  const { attributes } = element
   const triple = (name: string): Triple => {
     const attribute = attributes.get(name)
     return (attribute && (numbersOf(report, attribute, 3, LARGEST.geometry, label) as Triple | undefined)) ?? ZERO

@@ -30,12 +30,14 @@ const shown = (text: string, at: number): string => {
   return code === 10 || code === 13 ? 'the line ends' : `'${String.fromCodePoint(code)}' stands`
 }
 
+const MANY = 12
+
 /** Reads the start tag whose `<` is at `offset` by the grammar of XML 1.0 (productions 10, 40, 41, 44), strictly. */
 export function readTag(text: string, offset: number): Tag | Fault {
   const name = readName(text, offset + 1)
   if (!name) return { at: offset + 1, message: `After '<' ${shown(text, offset + 1)} where the name of an element is expected.` }
   const attributes: Attribute[] = []
-  const seen = new Set<string>()
+  let seen: Set<string> | null = null
   let at = offset + 1 + name.length
   for (;;) {
     const next = skipBlanks(text, at)
@@ -45,8 +47,10 @@ export function readTag(text: string, offset: number): Tag | Fault {
     const attribute = readAttribute(text, next, name)
     if (isFault(attribute)) return attribute
     if (next === at) return { at: next, message: `A blank is missing before the attribute '${attribute.name}' of <${name}>.` }
-    if (seen.has(attribute.name)) return { at: next, message: `The attribute '${attribute.name}' of <${name}> is given twice.` }
-    seen.add(attribute.name)
+    // Few names are quicker looked through than collected, and most tags have few.
+    if (attributes.length === MANY) seen = new Set(attributes.map((known) => known.name))
+    if (seen?.has(attribute.name) ?? attributes.some((known) => known.name === attribute.name)) return { at: next, message: `The attribute '${attribute.name}' of <${name}> is given twice.` }
+    seen?.add(attribute.name)
     attributes.push(attribute)
     at = attribute.end
   }

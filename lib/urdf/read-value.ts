@@ -8,14 +8,13 @@ import { quoted } from '@/lib/urdf/wording'
  *  only have to survive being subtracted, squared and converted, and files write 1e16 for 'none'. */
 export const LARGEST = { geometry: 1e9, limit: 1e30 } as const
 
-/** What the readers of elements share. */
-export interface Reading {
-  readonly text: string
-  readonly report: Report
-  readonly version: '1.0' | '1.1' | '1.2'
-}
-
 export type Attributes = ReadonlyMap<string, Attribute>
+
+/** An element whose attributes have been read. */
+export interface ReadElement {
+  readonly at: number
+  readonly attributes: Attributes
+}
 
 /** The attributes of an element by name. */
 export function attributesOf(text: string, element: XmlElement): Attributes {
@@ -24,9 +23,12 @@ export function attributesOf(text: string, element: XmlElement): Attributes {
   return new Map(tag.attributes.map((attribute) => [attribute.name, attribute]))
 }
 
+/** Whether a value was to be put in by xacro. */
+export const waitsForXacro = (value: string): boolean => /\$[{(]/.test(value)
+
 /** Whether a value still waits for xacro; reported where it does. element: such as "joint 'wrist'". */
 export function isUnexpanded(report: Report, attribute: Attribute, element: string): boolean {
-  if (!/\$[{(]/.test(attribute.value)) return false
+  if (!waitsForXacro(attribute.value)) return false
   report.add('xacro-unexpanded', attribute.valueAt, `${attribute.name}=${quoted(attribute.value)} still waits for xacro to put in a value.`, { element })
   return true
 }

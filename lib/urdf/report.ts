@@ -3,7 +3,7 @@ import { lineStartsOf, lineAt } from '@/lib/urdf/line-starts'
 import { RULES, type RuleId } from '@/lib/urdf/rules'
 
 /** More findings of one rule than this are counted in the last one, not listed: a broken file may repeat one fault 100 000 times. */
-export const LISTED_PER_RULE = 1000
+export const LISTED_PER_RULE = 5000
 
 /** Collects findings by offset while a file is read; sorts them and gives them line and column at the end. */
 export interface Report {

@@ -12,8 +12,23 @@ const follower = (type: string): string =>
   `  <joint name="grip" type="${type}">\n    <parent link="base"/>\n    <child link="left"/>\n${AXIS}\n    <limit effort="5" velocity="2"/>\n  </joint>\n` +
   `  <joint name="follow" type="continuous">\n    <parent link="base"/>\n    <child link="right"/>\n${AXIS}\n    <limit effort="5" velocity="2"/>\n    <mimic joint="grip"/>\n  </joint>\n</robot>`
 
+const bounded = (multiplier: number): string =>
+  `<robot name="r">\n  <link name="base"/>\n  <link name="left"/>\n  <link name="right"/>\n` +
+  `  <joint name="grip" type="revolute">\n    <parent link="base"/>\n    <child link="left"/>\n${AXIS}\n${LIMIT}\n  </joint>\n` +
+  `  <joint name="follow" type="revolute">\n    <parent link="base"/>\n    <child link="right"/>\n${AXIS}\n${LIMIT}\n    <mimic joint="grip" multiplier="${multiplier}"/>\n  </joint>\n</robot>`
+const XACRO = ' xmlns:xacro="http://www.ros.org/wiki/xacro"'
+
 /** What is imported, but not without saying what was supplied, changed or ignored. */
 export const WARNING_RULES = {
+  'robot-unnamed': {
+    severity: 'warning',
+    title: 'The robot has no name',
+    meaning: 'The attribute name of <robot> is missing, empty or blank.',
+    effect: 'None on the numbers: the name is only shown. Other programs refuse such a file.',
+    remedy: 'Write <robot name="…">.',
+    before: '<robot>\n  <link name="base"/>\n</robot>',
+    after: '<robot name="arm">\n  <link name="base"/>\n</robot>',
+  },
   'axis-normalised': {
     severity: 'warning',
     title: 'A direction was brought to length 1',
@@ -68,6 +83,15 @@ export const WARNING_RULES = {
     before: joint('continuous', `${AXIS}\n${LIMIT}`),
     after: joint('continuous', `${AXIS}\n    <limit effort="5" velocity="2"/>`),
   },
+  'mimic-leaves-range': {
+    severity: 'warning',
+    title: 'A following joint would leave its range',
+    meaning: 'A joint that mimics another is asked beyond its own limits when the one that it follows moves over its range: multiplier times a bound of the leader, plus the offset, lies outside.',
+    effect: 'The range of the leader is cut to what all that follow it allow. Programs that look at the limits of the leader only drive the follower into its stop.',
+    remedy: 'Correct the multiplier and the offset, or the limits of one of the two joints, so that both reach their ends together.',
+    before: bounded(2),
+    after: bounded(1),
+  },
   'mimic-of-fixed': {
     severity: 'warning',
     title: 'A joint mimics one that does not move',
@@ -79,21 +103,66 @@ export const WARNING_RULES = {
   },
   'xacro-leftover': {
     severity: 'warning',
-    title: 'Definitions of macros were left in the file',
-    meaning: 'The file has xacro elements that define a macro, a property or an argument but stand for nothing themselves.',
-    effect: 'They are ignored. Links and joints inside a macro do not exist until xacro has expanded it.',
+    title: 'Macros were left in the file',
+    meaning: 'The file has xacro elements that define something but stand for nothing themselves, or macros and ${…} where nothing that is computed depends on them, such as in the inertia or the shape of a link.',
+    effect: 'They are ignored. Links and joints inside the definition of a macro do not exist until xacro has expanded it.',
     remedy: 'Run the file through xacro and import what comes out, if the robot is not complete without them; else delete them.',
-    before: '<robot name="r" xmlns:xacro="http://www.ros.org/wiki/xacro">\n  <xacro:property name="reach" value="0.35"/>\n  <link name="base"/>\n</robot>',
-    after: '<robot name="r" xmlns:xacro="http://www.ros.org/wiki/xacro">\n  <link name="base"/>\n</robot>',
+    before: `<robot name="r"${XACRO}>\n  <xacro:property name="reach" value="0.35"/>\n  <link name="base"/>\n</robot>`,
+    after: `<robot name="r"${XACRO}>\n  <link name="base"/>\n</robot>`,
+  },
+  'namespace-undeclared': {
+    severity: 'warning',
+    title: 'A prefix is used without a declaration',
+    meaning: 'A name such as gz:plugin has a prefix before its colon, and neither the element nor one around it declares the prefix by xmlns:gz="…". Each prefix is reported once.',
+    effect: 'None on the numbers. Programs that look at namespaces refuse the whole file.',
+    remedy: 'Declare the prefix in <robot>, or take the prefix away.',
+    before: '<robot name="r">\n  <link name="base" gz:static="true"/>\n</robot>',
+    after: '<robot name="r" xmlns:gz="https://arm.example/gz">\n  <link name="base" gz:static="true"/>\n</robot>',
+  },
+  'closed-loop-ignored': {
+    severity: 'warning',
+    title: 'A closed loop stays open',
+    meaning: 'The file closes a loop of links by an element of its vendor, such as <loop_joint>. URDF has trees only and no such element.',
+    effect: 'The element is ignored: the joints of the loop are computed as if each moved on its own, although in reality they depend on each other.',
+    remedy: 'Describe the dependent joints by <mimic> where the ratio is constant; else compute only chains that do not pass the loop.',
+    before: '<robot name="r">\n  <link name="base"/>\n  <loop_joint name="bar" type="revolute">\n    <link1 link="base"/>\n    <link2 link="base"/>\n  </loop_joint>\n</robot>',
+    after: '<robot name="r">\n  <link name="base"/>\n</robot>',
+  },
+  'unit-suspect': {
+    severity: 'warning',
+    title: 'Values look like degrees or millimetres',
+    meaning: 'URDF is in radians and metres. One of these holds: more than half of the revolute joints, and two at least, have limits between 30 and 1000; an rpy is beyond 10 and no multiple of a quarter turn in radians; the middle distance between joints further out than the first is 30 or more; a slide is 10 or longer and moves at 20 or more. Each kind is reported once.',
+    effect: 'The values are read as radians and metres all the same: poses and limits are wrong if something else was meant.',
+    remedy: 'Convert the file, angles by pi / 180 and lengths by 1 / 1000, or ask the supplier. If the values are meant as they stand, nothing needs to be done.',
+    before: joint('revolute', `    <origin xyz="0 0 0.2" rpy="0 0 45"/>\n${AXIS}\n${LIMIT}`),
+    after: joint('revolute', `    <origin xyz="0 0 0.2" rpy="0 0 0.7853981633974483"/>\n${AXIS}\n${LIMIT}`),
+  },
+  'unknown-attribute': {
+    severity: 'warning',
+    title: 'An attribute is unknown',
+    meaning: 'A joint, or one of its elements that enter the computation, has an attribute that URDF does not have there. Attributes with a prefix are vendors\' own and do not count.',
+    effect: 'It is ignored. If it is a slip of the pen, the default is used in its place.',
+    remedy: 'Correct the name of the attribute, or delete it.',
+    before: joint('revolute', `    <origin xyz="0 0 0.2" ryp="0 0 0.5"/>\n${AXIS}\n${LIMIT}`),
+    after: joint('revolute', `    <origin xyz="0 0 0.2" rpy="0 0 0.5"/>\n${AXIS}\n${LIMIT}`),
   },
   'mesh-missing': {
     severity: 'warning',
     title: 'A mesh is not in the upload',
-    meaning: 'A link refers to a mesh file that was not sent along. Each file is reported once, at its first use.',
+    meaning: 'A link refers to a mesh file that is not in the archive, or names none; each is reported once, at its first use. A file that was sent alone has no meshes with it, which is said once.',
     effect: 'None on the numbers: kinematics needs no mesh. The shape of the link is not shown.',
     remedy: 'Nothing needs to be done for the computation.',
     before: mesh('<mesh filename="package://arm_description/meshes/base.stl"/>'),
     after: mesh('<cylinder radius="0.1" length="0.2"/>'),
+  },
+  'mesh-outside': {
+    severity: 'warning',
+    title: 'A mesh lies outside the upload',
+    meaning: 'A link refers to a mesh by an absolute path, an address such as file: or http:, or a path that leads up by "..".',
+    effect: 'None on the numbers. The path is never followed, and the shape of the link is not shown.',
+    remedy: 'Put the mesh beside the file or below it, and refer to it by package://name/path or a relative path.',
+    before: mesh('<mesh filename="file:///home/arm/base.stl"/>'),
+    after: mesh('<sphere radius="0.1"/>'),
   },
   'floating-or-planar': {
     severity: 'warning',
@@ -115,8 +184,8 @@ export const WARNING_RULES = {
   },
   'later-version-feature': {
     severity: 'warning',
-    title: 'An attribute belongs to a later version',
-    meaning: 'A joint uses quat_xyzw (new in URDF 1.1) or acceleration, deceleration or jerk (new in URDF 1.2), but the file says an earlier version, or none, which means 1.0.',
+    title: 'Something belongs to a later version',
+    meaning: 'The file uses quat_xyzw or a capsule (new in URDF 1.1) or acceleration, deceleration or jerk (new in URDF 1.2), but says an earlier version, or none, which means 1.0.',
     effect: 'The value is used here. A program that reads the file by its stated version ignores it and computes something else.',
     remedy: 'State the version that the file needs, or write the orientation as rpy.',
     before: joint('revolute', `    <origin xyz="0 0 0.2" quat_xyzw="0 0 0 1"/>\n${AXIS}\n${LIMIT}`),

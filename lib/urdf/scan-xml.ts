@@ -1,5 +1,6 @@
 import { isFault, type Tag } from '@/lib/urdf/read-tag'
 import { readToken } from '@/lib/urdf/read-token'
+import { createNamespaces } from '@/lib/urdf/namespaces'
 import type { Report } from '@/lib/urdf/report'
 import { findIllegalCharacter, isBlank, skipBlanks } from '@/lib/urdf/xml-characters'
 
@@ -18,7 +19,8 @@ export function scanXml(text: string, report: Report): ScannedXml | null {
   const illegal = findIllegalCharacter(text)
   if (illegal !== -1) return malformed(report, illegal, illegalCharacter(text, illegal))
   const open: { name: string; at: number }[] = []
-  const tags: string[] = []
+  const namespaces = createNamespaces(report)
+  let tags = ''
   const starts: number[] = []
   for (let at = 0; at < text.length; ) {
     const token = readToken(text, at)
@@ -38,8 +40,10 @@ export function scanXml(text: string, report: Report): ScannedXml | null {
       const { name, selfClosing } = token.tag
       starts.push(at)
       if (!withinLimits(report, token.tag, at, starts.length, open.length + 1)) return null
-      if (!selfClosing) open.push({ name, at })
-      tags.push('<', name, selfClosing ? '/>' : '>')
+      namespaces.enter(token.tag, at)
+      if (selfClosing) namespaces.leave()
+      else open.push({ name, at })
+      tags += `<${name}${selfClosing ? '/>' : '>'}`
     } else if (token.kind === 'end-tag') {
       const opened = open.pop()
       if (!opened) return malformed(report, at, `</${token.name}> closes an element that was not opened.`)
@@ -47,14 +51,15 @@ export function scanXml(text: string, report: Report): ScannedXml | null {
         const where = report.lineAt(opened.at)
         return malformed(report, at, `</${token.name}> stands where </${opened.name}> is expected: the <${opened.name}> of line ${where} is not closed.`)
       }
-      tags.push('</', token.name, '>')
+      namespaces.leave()
+      tags += `</${token.name}>`
     }
     at = token.end
   }
   const last = open.pop()
   if (last) return malformed(report, last.at, `<${last.name}> is not closed before the file ends.`)
   if (starts.length === 0) return malformed(report, 0, 'The file has no element.')
-  return { tags: tags.join(''), starts }
+  return { tags, starts }
 }
 
 function malformed(report: Report, at: number, message: string): null {

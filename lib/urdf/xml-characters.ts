@@ -42,10 +42,13 @@ export function readReference(text: string, offset: number): { value: string; le
   return ILLEGAL.test(value) ? null : { value, length: whole.length }
 }
 
+const NOT_PREDEFINED = /&(?!(?:lt|gt|amp|apos|quot);)/g
+
 /** Offset, counted in `text`, of the first `&` that is not a legal reference; -1 when there is none. */
 export function findBadReference(text: string): number {
-  for (let at = text.indexOf('&'); at !== -1; at = text.indexOf('&', at + 1)) {
-    if (!readReference(text, at)) return at
+  NOT_PREDEFINED.lastIndex = 0
+  for (let match = NOT_PREDEFINED.exec(text); match; match = NOT_PREDEFINED.exec(text)) {
+    if (!readReference(text, match.index)) return match.index
   }
   return -1
 }
@@ -53,13 +56,10 @@ export function findBadReference(text: string): number {
 /** The value of an attribute as XML 1.0 section 3.3.3 normalises it: white space becomes blanks, references are resolved
  *  (a referenced tab or newline stays what it is). `raw` has passed `findBadReference`. */
 export function decodeAttribute(raw: string): string {
-  const pieces: string[] = []
-  let from = 0
-  for (let at = raw.indexOf('&'); at !== -1; at = raw.indexOf('&', from)) {
-    const reference = readReference(raw, at)!
-    pieces.push(raw.slice(from, at).replace(/\r\n|[\t\r\n]/g, ' '), reference.value)
-    from = at + reference.length
+  if (!/[&\t\r\n]/.test(raw)) return raw
+  if (!/[\t\r\n]|&#/.test(raw)) {
+    // Those that stand for no '&' first, so that none is read that another has made.
+    return raw.replaceAll('&lt;', '<').replaceAll('&gt;', '>').replaceAll('&apos;', "'").replaceAll('&quot;', '"').replaceAll('&amp;', '&')
   }
-  pieces.push(raw.slice(from).replace(/\r\n|[\t\r\n]/g, ' '))
-  return pieces.join('')
+  return raw.replace(/&#?(\w+);|\r\n|[\t\r\n]/g, (met: string, name?: string) => (name === undefined ? ' ' : (PREDEFINED[name] ?? readReference(met, 0)!.value)))
 }

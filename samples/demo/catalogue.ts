@@ -1,8 +1,16 @@
+import type { ReferencePosesQuestion } from '@/lib/contract/reference-poses'
+
 /** One change of status of a demo revision. */
 export interface DemoTransition {
   readonly by: string
   readonly to: 'in-review' | 'released'
   readonly comment: string
+}
+
+/** Measured poses of a demo revision: a table beside the sample files, and how it is to be read. */
+export interface DemoEvidence extends Omit<ReferencePosesQuestion, 'table'> {
+  readonly by: string
+  readonly file: string
 }
 
 export interface DemoModel {
@@ -13,7 +21,7 @@ export interface DemoModel {
   /** Who imports its files. */
   readonly importer: string
   /** Sample files in the order of their revisions, each with what became of it. */
-  readonly revisions: readonly { readonly file: string; readonly note?: string; readonly history: readonly DemoTransition[] }[]
+  readonly revisions: readonly { readonly file: string; readonly note?: string; readonly evidence?: DemoEvidence; readonly history: readonly DemoTransition[] }[]
 }
 
 const INES = 'ines@tarnholm.example'
@@ -22,6 +30,17 @@ const RUNA = 'runa@kestrel.example'
 
 const submitted = (comment: string): DemoTransition => ({ by: INES, to: 'in-review', comment })
 const released = (comment: string): DemoTransition => ({ by: TOMAS, to: 'released', comment })
+
+/** The arm of cell 4 as it was measured: beyond the tolerance for the nominal description, within it for the calibrated one. */
+const MEASURED: DemoEvidence = {
+  by: INES,
+  file: 'skerry-7-reference-poses.csv',
+  units: { length: 'mm', angle: 'deg' },
+  rotation: 'fixed-xyz',
+  tool: null,
+  tolerance: { position: 0.25, orientation: 0.05 },
+  note: 'Laser tracker in cell 4, reflector at the flange centre, arm warm.',
+}
 
 /** What the two teams have in their registers: something of every status, so that every page has something to show. */
 export const CATALOGUE: readonly DemoModel[] = [
@@ -35,11 +54,13 @@ export const CATALOGUE: readonly DemoModel[] = [
       {
         file: 'skerry-7.urdf',
         note: 'As delivered, nominal dimensions.',
+        evidence: MEASURED,
         history: [submitted('Nominal file from the supplier.'), released('Dimensions agree with the drawing.')],
       },
       {
         file: 'skerry-7-revision-2.urdf',
         note: 'As calibrated on the floor; wrist limit narrowed for the hose dress.',
+        evidence: MEASURED,
         history: [
           submitted('Calibration of the arm in cell 4, and one limit.'),
           released('Compared with revision 1: fractions of a millimetre at the tool, and the wrist limit as agreed.'),

@@ -33,7 +33,8 @@ Sign in at ${url}/sign-in with the password  ${password}
   tomas@tarnholm.example   approver: releases and withdraws
   mira@tarnholm.example    administrator: keys
   kofi@tarnholm.example    reader
-  runa@kestrel.example     administrator of another team
+  runa@kestrel.example     administrator of another team, which releases only what was measured
+  edda@kestrel.example     approver of that team
 
 Gateway key (scope compute, kept in ${place}/demo-key):
   ${key}

@@ -3,6 +3,8 @@ import type { Role } from '@/lib/access/roles'
 export interface DemoTeam {
   readonly slug: string
   readonly name: string
+  /** Whether it releases only what was measured. */
+  readonly evidenceRequired: boolean
   readonly people: readonly { readonly email: string; readonly name: string; readonly role: Role }[]
   /** File in the data folder that keeps the team's key. */
   readonly keyFile: string
@@ -13,6 +15,7 @@ export const TEAMS: readonly DemoTeam[] = [
   {
     slug: 'tarnholm',
     name: 'Tarnholm Automation',
+    evidenceRequired: false,
     people: [
       { email: 'mira@tarnholm.example', name: 'Mira Lund', role: 'administrator' },
       { email: 'tomas@tarnholm.example', name: 'Tomas Aasen', role: 'approver' },
@@ -24,7 +27,11 @@ export const TEAMS: readonly DemoTeam[] = [
   {
     slug: 'kestrel',
     name: 'Kestrel Cellworks',
-    people: [{ email: 'runa@kestrel.example', name: 'Runa Holmvik', role: 'administrator' }],
+    evidenceRequired: true,
+    people: [
+      { email: 'runa@kestrel.example', name: 'Runa Holmvik', role: 'administrator' },
+      { email: 'edda@kestrel.example', name: 'Edda Solheim', role: 'approver' },
+    ],
     keyFile: 'kestrel-key',
   },
 ]

@@ -5,7 +5,7 @@ import { hashPassword, isPassword } from '@/lib/access/passwords'
 import type { DemoTeam } from './people'
 
 /** Makes the team and its people where they are missing; everyone has `password` afterwards. */
-export async function seedTeam(db: Db, { slug, name, people }: DemoTeam, password: string): Promise<void> {
+export async function seedTeam(db: Db, { slug, name, evidenceRequired, people }: DemoTeam, password: string): Promise<void> {
   // The people come before the team: a database with people in it and none of ours is somebody's installation.
   const ids = new Map<string, string>()
   for (const person of people) {
@@ -16,7 +16,7 @@ export async function seedTeam(db: Db, { slug, name, people }: DemoTeam, passwor
     const user = known ?? (await insertUser(db, { email: person.email, name: person.name, passwordHash: await hashPassword(password) }))
     ids.set(person.email, user.id)
   }
-  const team = (await findTeamBySlug(db, slug)) ?? (await insertTeam(db, { slug, name }))
+  const team = (await findTeamBySlug(db, slug)) ?? (await insertTeam(db, { slug, name, evidenceRequired }))
   for (const { email, role } of people) {
     const userId = ids.get(email)!
     if ((await findMembership(db, userId, slug)) === null) await insertMember(db, { teamId: team.id, userId, role })

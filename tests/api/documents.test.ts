@@ -1,10 +1,11 @@
 import { readFileSync } from 'node:fs'
 import path from 'node:path'
 import { describe, expect, inject, it } from 'vitest'
+import { OPERATIONS } from '@/lib/contract/operations'
 import { PROBLEMS } from '@/lib/errors'
 import { RULES } from '@/lib/urdf/rules'
 import { ALL_OPERATIONS, exampleRequest, PLACES } from './example-request'
-import { importModel } from './import-model'
+import { importModel, release } from './import-model'
 import { makeKey } from './make-key'
 import { get, send } from './send'
 import { asPerson } from './support/callers'
@@ -26,6 +27,8 @@ describe.each(ALL_OPERATIONS)('the example of %s', (name, operation) => {
     const { model } = await importModel(`Example of ${name}`, 'skerry-7.urdf')
     const places = { ...PLACES, model: model.slug, key: (await makeKey(['gateway'])).id }
     const headers = { ...(await asPerson('mira')), ...(operation.edits ? { 'if-match': '*' } : {}) }
+    if (operation.errors.includes('not-released')) await release(model.slug)
+    if (operation.path.includes('{set}')) await send(exampleRequest(OPERATIONS.addReferencePoses, headers, places))
     const response = await send(exampleRequest(operation, headers, places, 'gannet-4.urdf'))
     const { status, schema, mediaType } = operation.answer
     expect(response.status, response.text).toBe(status)
@@ -51,7 +54,7 @@ describe('the pages that answers point at', () => {
     expect([answer.status, await answer.text()]).toEqual([200, expect.stringContaining(rule)])
   })
 
-  it.each(['/docs/cautions', '/docs/conventions', '/docs/errors'])('are there: %s', async (at) => expect((await page(at)).status).toBe(200))
+  it.each(['/docs/cautions', '/docs/conventions', '/docs/errors', '/docs/evidence'])('are there: %s', async (at) => expect((await page(at)).status).toBe(200))
 
   it.each(['/docs/problems/never-was', '/docs/findings/never-was', '/docs/problems/__proto__'])('are not there: %s', async (at) => expect((await page(at)).status).toBe(404))
 })

@@ -7,7 +7,7 @@ import { fill, type Fields, type Headers, type Sent } from './send'
 export const sample = (file: string): Buffer => readFileSync(path.resolve(import.meta.dirname, '../../samples', file))
 
 /** Things of the demo scenario that a path may name; a key is made by whoever needs one. */
-export const PLACES: Fields = { team: 'tarnholm', model: 'skerry-7', revision: '1', key: 'neverWas0000' }
+export const PLACES: Fields = { team: 'tarnholm', model: 'skerry-7', revision: '1', set: '1', key: 'neverWas0000' }
 
 /** Text fields of multipart bodies. */
 const FORM_FIELDS: Fields = { name: 'Walked' }

@@ -5,7 +5,7 @@ import type { OperationName } from '@/lib/contract/operations'
 import type { ProblemCode } from '@/lib/errors'
 import { endedSession } from './ended-session'
 import { exampleRequest, PLACES, sample } from './example-request'
-import { importModel, postTransition } from './import-model'
+import { importModel, importReleased, postTransition } from './import-model'
 import { makeExpiredKey, makeKey, makeRevokedKey, mistype } from './make-key'
 import type { Fields, Headers, Sent } from './send'
 import { asKey, asPerson } from './support/callers'
@@ -26,6 +26,9 @@ const ended = once(() => endedSession('mira'))
 const aKey = once(async () => (await makeKey(['gateway'])).id)
 const longArm = once(async () => (await importModel('A very long arm', snake(100))).model.slug)
 const longestArm = once(async () => (await importModel('A longer arm still', snake(300, 0.02))).model.slug)
+/** So many joints that their check vectors would not fit into an answer. */
+const longestReleased = once(() => importReleased('An arm beyond measure', snake(16_500, 0.001)))
+const cartReleased = once(() => importReleased('A released cart', floatingCart()))
 const cart = once(async () => (await importModel('A cart', floatingCart())).model.slug)
 
 /** The declared example as an administrator, who may do everything, with changes. */
@@ -35,6 +38,12 @@ async function asAdministrator(operation: Operation, more: Partial<Sent> = {}, p
 }
 
 const withHeaders = (make: () => Promise<Headers>): Provoke => async (operation) => exampleRequest(operation, await make(), { ...PLACES, key: await aKey() })
+
+/** The request with a query. */
+const withQuery = (query: Fields, places: Fields = {}): Provoke => async (operation) => {
+  const sent = await asAdministrator(operation, {}, places)
+  return { ...sent, path: `${sent.path}?${new URLSearchParams({ ...query })}` }
+}
 
 /** The JSON example with other fields. */
 const withFields = (fields: object, places: Fields = {}): Provoke => async (operation) =>
@@ -67,8 +76,13 @@ export const PROVOCATIONS: Partial<Record<ProblemCode, Provoke>> = {
   'origin-refused': withHeaders(async () => ({ ...(await asPerson('mira')), origin: 'https://elsewhere.example' })),
   'team-not-found': (operation) => asAdministrator(operation, {}, { team: 'never-was' }),
   'model-not-found': (operation) => asAdministrator(operation, {}, { model: 'never-was' }),
-  'revision-not-found': (operation) => asAdministrator(operation, {}, { revision: '4000000' }),
-  'nothing-released': (operation) => asAdministrator(operation, {}, { model: 'skerry-7-rail', revision: 'released' }),
+  'revision-not-found': (operation, name) =>
+    name === 'compareRevisions' ? withQuery({ from: '4000000' })(operation, name) : asAdministrator(operation, {}, { revision: '4000000' }),
+  'nothing-released': (operation, name) =>
+    name === 'compareRevisions'
+      ? withQuery({ from: 'released' }, { model: 'skerry-7-rail' })(operation, name)
+      : asAdministrator(operation, {}, { model: 'skerry-7-rail', revision: 'released' }),
+  'reference-poses-not-found': (operation) => asAdministrator(operation, {}, { set: '4000000' }),
   'key-not-found': (operation) => asAdministrator(operation, {}, { key: 'neverWas0000' }),
   'not-acceptable': (operation) => asAdministrator(operation, { headers: { accept: 'image/png' } }),
   'unsupported-media-type': async (operation) => ({
@@ -86,13 +100,18 @@ export const PROVOCATIONS: Partial<Record<ProblemCode, Provoke>> = {
   'fingerprint-mismatch': (operation) => asAdministrator(operation, { headers: { 'if-match': `"${'0'.repeat(64)}"` } }),
   'length-mismatch': (operation, name) =>
     withFields({ [name === 'inverseKinematics' ? 'seeds' : 'configurations']: [[0, 0, 0, 0, 0, 0]] })(operation, name),
-  'chain-not-found': withFields({ chain: { tip: 'never_was' } }),
-  'chain-not-computable': async (operation, name) =>
-    withFields(
+  'chain-not-found': (operation, name) => (operation.body === undefined ? withQuery({ tip: 'never_was' }) : withFields({ chain: { tip: 'never_was' } }))(operation, name),
+  'chain-not-computable': async (operation, name) => {
+    if (name === 'compareRevisions') return withQuery({ base: 'ground', tip: 'arm' }, { model: await cart() })(operation, name)
+    if (name === 'getCheckVectors') return withQuery({ base: 'ground', tip: 'arm' }, { model: await cartReleased() })(operation, name)
+    if (operation.tag === 'Evidence') return withFields({ chain: { base: 'ground', tip: 'arm' } }, { model: await cart() })(operation, name)
+    return withFields(
       { ...(name === 'inverseKinematics' ? { seeds: [[0]] } : { configurations: [[0]] }), chain: { base: 'ground', tip: 'arm' } },
       { model: await cart() },
-    )(operation, name),
+    )(operation, name)
+  },
   'answer-too-large': async (operation, name) => {
+    if (name === 'getCheckVectors') return asAdministrator(operation, {}, { model: await longestReleased() })
     if (name === 'inverseKinematics') return withFields({ targets: outOfReach(10_000), seeds: undefined }, { model: await longestArm() })(operation, name)
     return withFields(
       { configurations: rows(10_000, 100), ...(name === 'jointRates' ? { secondary: [] } : {}), ...(name === 'forwardKinematics' ? { links: new Array(50).fill('l1') } : {}) },
@@ -108,6 +127,12 @@ export const PROVOCATIONS: Partial<Record<ProblemCode, Provoke>> = {
     asAdministrator(operation, { form: { fields: { name: 'Skerry', slug: 'skerry-7' }, file: { name: 'skerry-7.urdf', bytes: sample('skerry-7.urdf') } } }),
   'same-content': (operation) => asAdministrator(operation, { form: { fields: {}, file: { name: 'again.urdf', bytes: sample('skerry-7.urdf') } } }),
   'transition-refused': (operation) => asAdministrator(operation, { json: { to: 'in-review' } }),
+  'not-released': (operation) => asAdministrator(operation, {}, { model: 'fulmar-6' }),
+  'evidence-missing': async (operation) => {
+    const { model } = await importModel('Never measured', 'trainer-3r.urdf', 'runa', 'kestrel')
+    await postTransition(model.slug, 1, 'in-review', 'runa', undefined, 'kestrel')
+    return { ...exampleRequest(operation, await asPerson('runa'), { ...PLACES, team: 'kestrel', model: model.slug }), json: { to: 'released' } }
+  },
   'four-eyes': async (operation) => {
     const { model } = await importModel('Imported and released by one', 'trainer-3r.urdf', 'mira')
     await postTransition(model.slug, 1, 'in-review', 'ines')

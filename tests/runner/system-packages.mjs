@@ -12,6 +12,7 @@ const NEEDS = [
     packages: ['python3', 'python3-pykdl', 'python3-numpy'],
     isThere: () => spawnSync('/usr/bin/python3', ['-c', 'import PyKDL, numpy']).status === 0,
   },
+  { what: 'check_urdf, a second reader of URDF, for the reference tests', packages: ['liburdfdom-tools'], isThere: () => isOnPath('check_urdf') },
   { what: 'curl and OpenSSL, for the commands of the README', packages: ['curl', 'openssl'], isThere: () => ['curl', 'openssl'].every(isOnPath) },
   { what: 'a PostgreSQL server, version 15 or later', packages: ['postgresql'], isThere: () => findPostgres() !== undefined },
 ]

@@ -8,6 +8,7 @@ export const PEOPLE = {
   ines: 'ines@tarnholm.example',
   kofi: 'kofi@tarnholm.example',
   runa: 'runa@kestrel.example',
+  edda: 'edda@kestrel.example',
 } as const
 export type Person = keyof typeof PEOPLE
 

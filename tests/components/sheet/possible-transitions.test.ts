@@ -1,15 +1,15 @@
 import { describe, expect, it } from 'vitest'
-import { fourEyesRefusal, possibleTransitions } from '@/app/teams/[team]/models/[model]/revisions/[revision]/possible-transitions'
+import { evidenceRefusal, fourEyesRefusal, possibleTransitions } from '@/app/teams/[team]/models/[model]/revisions/[revision]/possible-transitions'
 import type { Role } from '@/lib/access/roles'
 
-const caller = (role: Role, team: { fourEyes?: boolean; reviewRequired?: boolean } = {}) => ({
+const caller = (role: Role, team: { fourEyes?: boolean; reviewRequired?: boolean; evidenceRequired?: boolean } = {}) => ({
   kind: 'person' as const,
   sessionId: 's',
   userId: 'u1',
   name: 'Ines',
   email: 'ines@tarnholm.example',
   role,
-  team: { id: 't', slug: 't', name: 'T', fourEyes: true, reviewRequired: true, ...team },
+  team: { id: 't', slug: 't', name: 'T', fourEyes: true, reviewRequired: true, evidenceRequired: false, ...team },
 })
 
 describe('possibleTransitions', () => {
@@ -42,5 +42,17 @@ describe('fourEyesRefusal', () => {
   it('is silent for another person, and where the team does not ask for four eyes', () => {
     expect(fourEyesRefusal({ ...caller('approver'), name: 'Tomas' }, 'u2', history)).toBeUndefined()
     expect(fourEyesRefusal(caller('approver', { fourEyes: false }), 'u1', history)).toBeUndefined()
+  })
+})
+
+describe('evidenceRefusal', () => {
+  it('says nothing where the team demands nothing, and where the newest reference poses pass', () => {
+    expect(evidenceRefusal(caller('approver'), undefined)).toBeUndefined()
+    expect(evidenceRefusal(caller('approver', { evidenceRequired: true }), { number: 2, passed: true })).toBeUndefined()
+  })
+
+  it('says what is missing where the team demands a pass', () => {
+    expect(evidenceRefusal(caller('approver', { evidenceRequired: true }), undefined)).toContain('have to be stored')
+    expect(evidenceRefusal(caller('approver', { evidenceRequired: true }), { number: 2, passed: false })).toContain('number 2')
   })
 })

@@ -5,7 +5,7 @@ import { includesRole, ROLES } from '@/lib/access/roles'
 import { SCOPES } from '@/lib/contract/key-operations'
 import { type OperationName, OPERATIONS } from '@/lib/contract/operations'
 
-const team = { id: 't', slug: 't', name: 'T', fourEyes: true, reviewRequired: true }
+const team = { id: 't', slug: 't', name: 'T', fourEyes: true, reviewRequired: true, evidenceRequired: false }
 const names = Object.keys(OPERATIONS) as OperationName[]
 const keyWith = (scopes: readonly (typeof SCOPES)[number][]): Caller => ({ kind: 'key', keyId: 'k', label: 'K', userId: 'u', scopes, team })
 

@@ -1,4 +1,5 @@
 import type { Metadata } from 'next'
+import { EvidencePanel } from '@/components/evidence/evidence-panel'
 import { revisionHref } from '@/components/import/revision-href'
 import { Main } from '@/components/shell/main'
 import { ChainChooser } from '@/components/sheet/chain-chooser'
@@ -22,11 +23,13 @@ import { getFindings } from '@/lib/catalog/get-findings'
 import { getModel } from '@/lib/catalog/get-model'
 import { getRevision } from '@/lib/catalog/get-revision'
 import { listRevisions } from '@/lib/catalog/list-revisions'
+import { listReferencePoses } from '@/lib/compute/list-reference-poses'
+import type { ReferencePosesSummary } from '@/lib/contract/reference-poses'
 import { siteUrl } from '@/lib/env'
 import { visit } from '@/lib/http/visit'
 import { reading } from '../../../../../reading'
 import { drawnChain } from './drawn-chain'
-import { fourEyesRefusal, possibleTransitions } from './possible-transitions'
+import { evidenceRefusal, fourEyesRefusal, possibleTransitions } from './possible-transitions'
 
 interface SheetPageProps {
   readonly params: Promise<{ team: string; model: string; revision: string }>
@@ -39,17 +42,19 @@ export async function generateMetadata({ params }: SheetPageProps): Promise<Meta
 }
 
 const MOST_REVISIONS = 200
+const MOST_SETS = 5
 
 const one = (value: string | string[] | undefined): string | undefined => (typeof value === 'string' && value !== '' ? value : undefined)
 
 export default async function SheetPage({ params, searchParams }: SheetPageProps) {
   const { caller, at } = await visit('getRevision', await params)
   const asked = await searchParams
-  const [{ body: revision }, { body: model }, { body: revisions }, { body: findings }, drawn] = await Promise.all([
+  const [{ body: revision }, { body: model }, { body: revisions }, { body: findings }, { body: poses }, drawn] = await Promise.all([
     getRevision(caller, reading(at)),
     getModel(caller, reading(at)),
     listRevisions(caller, reading(at, { limit: MOST_REVISIONS })),
     getFindings(caller, reading(at)),
+    listReferencePoses(caller, reading(at, { limit: MOST_SETS })),
     drawnChain(caller, at, { base: one(asked.base), tip: one(asked.tip) }),
   ])
   const { slug: team } = caller.team
@@ -66,7 +71,7 @@ export default async function SheetPage({ params, searchParams }: SheetPageProps
         model={model}
         revision={revision}
         possible={possibleTransitions(caller, revision.status)}
-        fourEyes={fourEyesRefusal(caller, at.revision.importedBy, revision.history)}
+        barred={evidenceRefusal(caller, poses.items[0]) ?? fourEyesRefusal(caller, at.revision.importedBy, revision.history)}
         mayImport={may(caller, 'createRevision')}
       />
       <InForceNotice status={revision.status} revision={revision.revision} released={model.released} href={href} />
@@ -86,6 +91,14 @@ export default async function SheetPage({ params, searchParams }: SheetPageProps
       </SheetFrame>
       <div className="mt-8 grid grid-cols-[minmax(0,1fr)] items-start gap-x-10 gap-y-8 desk:grid-cols-[repeat(2,minmax(0,1fr))]">
         <HistoryList history={revision.history} />
+        <EvidencePanel
+          path={path}
+          sets={poses.items as ReferencePosesSummary[]}
+          hasMore={poses.nextCursor !== undefined}
+          mayAdd={may(caller, 'addReferencePoses')}
+          wasReleased={revision.history.some(({ status }) => status === 'released')}
+          isRequired={caller.team.evidenceRequired}
+        />
         <ChainChooser
           href={href(revision.revision)}
           chains={revision.chains}

@@ -13,6 +13,14 @@ export function possibleTransitions(caller: PersonCaller, status: Revision['stat
   ).map(({ to }) => to as TransitionTo)
 }
 
+/** Why a release will be refused for want of evidence; undefined when it will not. newest: the newest reference poses. */
+export function evidenceRefusal(caller: PersonCaller, newest: { readonly number: number; readonly passed: boolean } | undefined): string | undefined {
+  if (!caller.team.evidenceRequired || newest?.passed === true) return undefined
+  return newest === undefined
+    ? 'This team releases only what was measured: reference poses have to be stored first.'
+    : `The newest reference poses, number ${newest.number}, do not pass, and this team releases only what does.`
+}
+
 /** Why a release by this person will be refused; undefined when it will not. The service decides by account; a submission
  *  is recognised here by its name, which is all that a history keeps for reading. */
 export function fourEyesRefusal(caller: PersonCaller, importedBy: string | null, history: Revision['history']): string | undefined {
