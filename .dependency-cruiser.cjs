@@ -2,6 +2,8 @@
  *  A layer is a folder or file; its own files may always import each other. `ours` and `packages` list what else. */
 
 const EVERYWHERE = ['lib/errors.ts', 'lib/units.ts', 'lib/env.ts', 'lib/log.ts', 'lib/in-slices.ts']
+// What reads several of the use-cases: it stands above them.
+const EXPORT = 'lib/export/'
 const USE_CASES = ['lib/catalog/', 'lib/compute/', 'lib/cells/', 'lib/keys/', 'lib/teams/', 'lib/logbook/']
 const PURE = ['lib/urdf/', 'lib/kinematics/', 'lib/math/']
 
@@ -9,6 +11,9 @@ const LAYERS = [
   { layer: 'lib/math/', ours: [], packages: [], core: [] },
   { layer: 'lib/kinematics/', ours: ['lib/math/'], packages: [], core: [] },
   { layer: 'lib/urdf/', ours: ['lib/kinematics/', 'lib/math/', 'lib/errors.ts', 'lib/units.ts'], packages: ['fast-xml-parser'], core: ['crypto'] },
+  // The directory of media types is the contract's.
+  { layer: 'lib/archive/', ours: ['lib/urdf/', 'lib/contract/mesh-media-types.ts'], packages: ['yauzl', '@types/yauzl'], core: ['buffer', 'crypto', 'zlib'] },
+  { layer: 'lib/storage/', ours: ['lib/errors.ts', 'lib/env.ts', 'lib/log.ts', 'lib/in-slices.ts'], packages: ['@aws-sdk/client-s3'], core: null },
   { layer: 'lib/errors.ts', ours: [], packages: [], core: [] },
   { layer: 'lib/units.ts', ours: [], packages: [], core: [] },
   { layer: 'lib/env.ts', ours: [], packages: [], core: ['path'] },
@@ -23,14 +28,15 @@ const LAYERS = [
   ...USE_CASES.map((layer) => ({
     layer,
     // A team's slug is derived as a model's is.
-    ours: [...EVERYWHERE, ...PURE, 'lib/access/', 'lib/logbook/', 'lib/mail/', 'lib/storage/', 'lib/contract/', 'db/', 'lib/catalog/derive-slug.ts'],
+    ours: [...EVERYWHERE, ...PURE, 'lib/access/', 'lib/logbook/', 'lib/mail/', 'lib/storage/', 'lib/archive/', 'lib/contract/', 'db/', 'lib/catalog/derive-slug.ts'],
     packages: null,
     core: null,
   })),
+  { layer: EXPORT, ours: [...EVERYWHERE, ...PURE, 'lib/access/', 'lib/catalog/', 'lib/compute/', 'lib/storage/', 'lib/contract/', 'db/'], packages: ['yazl', '@types/yazl'], core: null },
   // The document says who may call what.
   { layer: 'openapi/', ours: [...EVERYWHERE, 'lib/contract/', 'lib/access/permissions.ts'], packages: ['zod', '@asteasolutions/zod-to-openapi'], core: null },
   { layer: 'components/', ours: ['lib/contract/', 'lib/errors.ts', 'lib/units.ts', 'lib/kinematics/', 'lib/math/'], packages: null, core: [] },
-  { layer: 'app/', ours: [...EVERYWHERE, ...USE_CASES, ...PURE, 'components/', 'lib/http/', 'lib/contract/', 'lib/access/', 'openapi/'], packages: null, core: null },
+  { layer: 'app/', ours: [...EVERYWHERE, ...USE_CASES, EXPORT, ...PURE, 'components/', 'lib/http/', 'lib/contract/', 'lib/access/', 'openapi/'], packages: null, core: null },
 ]
 
 const ALL = '^(app|components|lib|db|openapi|samples|tests|drizzle)/'
@@ -72,6 +78,9 @@ const OWNED = [
   { packages: ['drizzle-orm', '@electric-sql/pglite', 'pg'], owner: 'db/' },
   { packages: ['pino'], owner: 'lib/log.ts' },
   { packages: ['fast-xml-parser'], owner: 'lib/urdf/' },
+  { packages: ['yauzl'], owner: 'lib/archive/' },
+  { packages: ['yazl'], owner: 'lib/export/' },
+  { packages: ['@aws-sdk/client-s3'], owner: 'lib/storage/' },
 ]
 const ownership = OWNED.map(({ packages, owner }) => ({
   name: `only ${owner} imports ${packages.join(' ')}`,
@@ -90,7 +99,7 @@ module.exports = {
       name: 'a route file imports only the edge, the use-cases and the OpenAPI document',
       severity: 'error',
       from: { path: '^app/api/v1/.*route\\.ts$' },
-      to: { path: ALL, pathNot: ['lib/http/', ...USE_CASES, 'openapi/'].map(pattern) },
+      to: { path: ALL, pathNot: ['lib/http/', ...USE_CASES, EXPORT, 'openapi/'].map(pattern) },
     },
     { name: 'only tests import tests', severity: 'error', from: { pathNot: '^tests/' }, to: { path: '^tests/' } },
   ],

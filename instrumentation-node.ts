@@ -1,6 +1,7 @@
 import { database, type Database } from '@/db/client'
+import { fillRegister } from '@/db/queries/register'
 import { endReaders } from '@/lib/catalog/reader-pool'
-import { sessionSecret } from '@/lib/env'
+import { objectStore, sessionSecret } from '@/lib/env'
 import { log } from '@/lib/log'
 import { announceSetup } from '@/lib/teams/setup-code'
 
@@ -9,8 +10,10 @@ import { announceSetup } from '@/lib/teams/setup-code'
 export async function start(): Promise<void> {
   try {
     sessionSecret()
+    objectStore()
     const opened = await database()
     closeOnSignal(opened)
+    await fillRegister(opened.db)
     log.info({ database: opened.kind }, 'database ready')
     const code = await announceSetup()
     // The code opens an empty installation to whoever reads this log, and to nobody else; it is void after its use.

@@ -20,9 +20,19 @@ function policy(nonce: string): string {
   ].join('; ')
 }
 
+/** The path of a mesh is the only part of an address in which a file's own name stands. */
+function isMeshPath(pathname: string): boolean {
+  if (!/\/revisions\/[^/]+\/meshes\//.test(pathname)) return false
+  try {
+    return decodeURIComponent(pathname) !== ''
+  } catch {
+    return false
+  }
+}
+
 /** Puts the security fields on every page. The API answers data, and has its own. */
 export function proxy(request: NextRequest): Response | Promise<Response> {
-  if (request.nextUrl.pathname.startsWith('/api/')) return notFound(request)
+  if (request.nextUrl.pathname.startsWith('/api/')) return isMeshPath(request.nextUrl.pathname) ? NextResponse.next() : notFound(request)
   const nonce = Buffer.from(crypto.getRandomValues(new Uint8Array(16))).toString('base64')
   const content = policy(nonce)
   const headers = new Headers(request.headers)
@@ -45,7 +55,7 @@ export function proxy(request: NextRequest): Response | Promise<Response> {
 export const config = {
   matcher: [
     '/((?!api/|_next/static|_next/image|icon.svg|favicon.ico).*)',
-    // Of the API only what holds an escape that is no ASCII character. No name has one, and the framework answers 500
+    // Of the API only what holds an escape that is no ASCII character. No name but a mesh's has one, and the framework answers 500
     // to those that are not UTF-8.
     '/api/v1/((?:.*)%(?![0-7][0-9A-Fa-f]).*)',
   ],

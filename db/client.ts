@@ -6,10 +6,13 @@ import type { PgDatabase, PgQueryResultHKT } from 'drizzle-orm/pg-core'
 import { databaseUrl, dataDir, isBuilding, isDatabaseInMemory } from '@/lib/env'
 import * as catalog from './schema/catalog'
 import * as evidence from './schema/evidence'
+import * as files from './schema/files'
+import * as keyUses from './schema/key-uses'
 import * as keys from './schema/keys'
 import * as people from './schema/people'
+import * as register from './schema/register'
 
-export const schema = { ...people, ...catalog, ...evidence, ...keys }
+export const schema = { ...people, ...catalog, ...evidence, ...files, ...keys, ...keyUses, ...register }
 
 /** One type for both drivers: the embedded one and the server's extend PgDatabase, and so does a transaction. */
 export type Db = PgDatabase<PgQueryResultHKT, typeof schema>
@@ -51,14 +54,16 @@ function lockFolder(folder: string): Promise<Server> {
  *  archive: a dump to start from, for an empty folder. */
 export async function openEmbedded(folder: string | undefined, archive?: Blob) {
   const { PGlite } = await import('@electric-sql/pglite')
+  const { pg_trgm } = await import('@electric-sql/pglite/contrib/pg_trgm')
+  const extensions = { pg_trgm }
   if (folder === undefined) {
-    const client = await PGlite.create()
+    const client = await PGlite.create({ extensions })
     return { client, close: () => client.close() }
   }
   mkdirSync(folder, { recursive: true })
   const lock = await lockFolder(folder)
   try {
-    const client = await PGlite.create(folder, archive === undefined ? {} : { loadDataDir: archive })
+    const client = await PGlite.create(folder, archive === undefined ? { extensions } : { extensions, loadDataDir: archive })
     return {
       client,
       close: async () => {
@@ -107,6 +112,8 @@ async function open(): Promise<Database> {
   const { client, close } = await openEmbedded(isDatabaseInMemory() ? undefined : embeddedFolder())
   const db = drizzle({ client, schema })
   await migrate(db, { migrationsFolder: MIGRATIONS })
+  // A server counts by itself what is in its tables, to choose among indexes; here nobody else does.
+  await client.exec('analyze')
   return { db, kind: 'embedded', close, dump: async () => new Uint8Array(await (await client.dumpDataDir('gzip')).arrayBuffer()) }
 }
 

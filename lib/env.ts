@@ -29,6 +29,37 @@ export const dataDir = (): string => path.resolve(/* turbopackIgnore: true */ te
 /** Address of a PostgreSQL server, or undefined for the embedded database. */
 export const databaseUrl = (): string | undefined => text('DATABASE_URL')
 
+/** Where files are kept when not in a folder: an S3-compatible object store. */
+export interface ObjectStore {
+  readonly bucket: string
+  readonly region: string
+  /** Undefined: the endpoint of the region, as the client library knows it. */
+  readonly endpoint: string | undefined
+  /** Undefined: found as the client library does, for example from the machine's role. */
+  readonly credentials: { readonly accessKeyId: string; readonly secretAccessKey: string } | undefined
+}
+
+/** The object store that is configured; undefined when files are kept in a folder. Fails with a sentence for the operator. */
+export function objectStore(): ObjectStore | undefined {
+  const bucket = text('ELBOWROOM_S3_BUCKET')
+  const endpoint = text('ELBOWROOM_S3_ENDPOINT')
+  const accessKeyId = text('ELBOWROOM_S3_ACCESS_KEY_ID')
+  const secretAccessKey = text('ELBOWROOM_S3_SECRET_ACCESS_KEY')
+  if (bucket === undefined) {
+    if ((endpoint ?? accessKeyId ?? secretAccessKey) !== undefined) throw new Error('ELBOWROOM_S3_BUCKET is missing, and other ELBOWROOM_S3_ variables are set.')
+    return undefined
+  }
+  if (!/^[a-z0-9][a-z0-9.-]{1,61}[a-z0-9]$/.test(bucket)) throw new Error('ELBOWROOM_S3_BUCKET must be the name of a bucket: 3 to 63 of a-z, 0-9, "." and "-".')
+  if (endpoint !== undefined && !/^https?:\/\/[^/?#@]+\/?$/.test(endpoint)) {
+    throw new Error('ELBOWROOM_S3_ENDPOINT must be http:// or https:// and a host, without a path or a password.')
+  }
+  if ((accessKeyId === undefined) !== (secretAccessKey === undefined)) {
+    throw new Error('Set both ELBOWROOM_S3_ACCESS_KEY_ID and ELBOWROOM_S3_SECRET_ACCESS_KEY, or neither.')
+  }
+  const credentials = accessKeyId === undefined || secretAccessKey === undefined ? undefined : { accessKeyId, secretAccessKey }
+  return { bucket, region: text('ELBOWROOM_S3_REGION') ?? 'us-east-1', endpoint, credentials }
+}
+
 /** True for tests that want the embedded database in memory. */
 export const isDatabaseInMemory = (): boolean => text('ELBOWROOM_DATA_DIR') === 'memory'
 

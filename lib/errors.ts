@@ -109,6 +109,12 @@ export const PROBLEMS = {
     meaning: 'The revision has no set of reference poses of this number.',
     remedy: 'List the reference poses of the revision; they count from 1.',
   },
+  'mesh-not-found': {
+    status: 404,
+    title: 'No such mesh',
+    meaning: 'No mesh or texture of this path came with the revision.',
+    remedy: 'Read the revision: its archive.files lists the paths. Encode each part of a path by itself.',
+  },
   'method-not-allowed': {
     status: 405,
     title: 'Not with this method',
@@ -240,6 +246,12 @@ export const PROBLEMS = {
     title: 'Something failed here',
     meaning: 'The service met a fault of its own. It is logged under the request id. Nothing was half stored.',
     remedy: 'Try once more; if it stays, send the request id to whoever runs this installation.',
+  },
+  'file-unavailable': {
+    status: 503,
+    title: 'The file cannot be had just now',
+    meaning: 'The file is recorded, but the file storage does not hold it, cannot be reached, or holds other bytes than were stored.',
+    remedy: 'Try again shortly. If it stays, tell whoever runs this installation: files may be missing from a restored backup.',
   },
   'not-ready': {
     status: 503,

@@ -10,6 +10,7 @@ const BY_PARAMETER: Readonly<Record<string, readonly ProblemCode[]>> = {
   '{model}': ['model-not-found'],
   '{revision}': ['revision-not-found', 'nothing-released'],
   '{key}': ['key-not-found'],
+  '{path}': ['mesh-not-found'],
   '{set}': ['reference-poses-not-found'],
 }
 

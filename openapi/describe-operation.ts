@@ -13,6 +13,7 @@ const PARAMETERS: Readonly<Record<string, { description: string; example: string
   model: { description: 'Slug of the model.', example: 'skerry-7' },
   revision: { description: 'Number of the revision, or "released" for the one in force.', example: 'released' },
   key: { description: 'Id of the key.', example: '4fXk02MzQ8aT' },
+  path: { description: 'Path of the mesh in the archive, each part encoded by itself.', example: 'meshes/base.stl' },
   set: { description: 'Number of the reference poses within the revision.', example: '1' },
 }
 
@@ -34,7 +35,7 @@ const whoMayCall = (name: OperationName) => {
 
 /** The multipart body of an import: the text fields and the file. */
 const uploadOf = (form: z.ZodObject) =>
-  form.extend({ file: z.string().meta({ format: 'binary', description: 'A URDF (.urdf or .xml), at most 8 MiB.' }) })
+  form.extend({ file: z.string().meta({ format: 'binary', description: 'A URDF (.urdf or .xml, at most 8 MiB), or an archive of one with its meshes (.zip, at most 64 MiB).' }) })
 
 const BYTES = z.string().meta({ format: 'binary' })
 
@@ -94,7 +95,7 @@ const TABLE_OUT = (field: string) => ({ 'text/csv': { schema: z.string().meta({ 
 
 function successOf({ answer, pinned, records, table }: Operation): RouteConfig['responses'][string] {
   if (answer.mediaType !== undefined) {
-    return { description: 'The bytes, as an attachment.', content: { [answer.mediaType]: { schema: BYTES } } }
+    return { description: 'The bytes, as an attachment.', content: Object.fromEntries([answer.mediaType, ...(answer.alsoMediaTypes ?? [])].map((type) => [type, { schema: BYTES }])) }
   }
   const headers = { ...(pinned && { 'Model-Fingerprint': FIELD('The fingerprint of the model that the answer was computed from.') }), ...(records && RECORD_FIELDS) }
   return {

@@ -8,6 +8,8 @@ export const ROUTES = {
   checkImport: ['POST', '/teams/{team}/imports/check'],
   createRevision: ['POST', '/teams/{team}/models/{model}/revisions'],
   getSource: ['GET', '/teams/{team}/models/{model}/revisions/{revision}/source'],
+  getMesh: ['GET', '/teams/{team}/models/{model}/revisions/{revision}/meshes/{path}'],
+  exportModel: ['GET', '/teams/{team}/models/{model}/export'],
   getFindings: ['GET', '/teams/{team}/models/{model}/revisions/{revision}/findings'],
   transitionRevision: ['POST', '/teams/{team}/models/{model}/revisions/{revision}/transitions'],
   addReferencePoses: ['POST', '/teams/{team}/models/{model}/revisions/{revision}/reference-poses'],

@@ -16,7 +16,11 @@ export function DeskDrafts({ team, drafts }: DeskDraftsProps) {
         <DeskLine
           key={`${draft.model} ${draft.revision}`}
           href={revisionHref(team, draft.model, draft.revision)}
-          title={`Check and submit ${draft.name}, revision ${draft.revision}`}
+          title={
+            <>
+              Check and submit <bdi>{draft.name}</bdi>, revision {draft.revision}
+            </>
+          }
           aside={<Timestamp at={draft.importedAt} className="text-soft" />}
         >
           Imported, not submitted for review.

@@ -19,7 +19,11 @@ export function DeskKeys({ team, keys, now }: DeskKeysProps) {
         <DeskLine
           key={key.id}
           href={`/teams/${team}/keys#${key.id}`}
-          title={`Renew ${key.label}`}
+          title={
+            <>
+              Renew <bdi>{key.label}</bdi>
+            </>
+          }
           aside={
             <span className="inline-flex items-center gap-1.5 font-semibold whitespace-nowrap text-amber">
               <Mark name="warning" />

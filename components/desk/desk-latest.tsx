@@ -23,7 +23,11 @@ export function DeskLatest({ team, latest }: { readonly team: string; readonly l
         <DeskLine
           key={i}
           href={revisionHref(team, change.model, change.revision)}
-          title={`${change.name}, revision ${change.revision}`}
+          title={
+            <>
+              <bdi>{change.name}</bdi>, revision {change.revision}
+            </>
+          }
           aside={
             <span className="flex items-baseline gap-4">
               <StatusMark status={change.status} />
@@ -32,7 +36,11 @@ export function DeskLatest({ team, latest }: { readonly team: string; readonly l
           }
         >
           <bdi>{change.by}</bdi>
-          {change.comment === undefined ? '' : `: ${change.comment}`}
+          {change.comment === undefined ? null : (
+            <>
+              : <bdi>{change.comment}</bdi>
+            </>
+          )}
         </DeskLine>
       ))}
     </DeskSection>

@@ -9,6 +9,7 @@ export interface DocsPageEntry {
 export const DOCS_PAGES: readonly DocsPageEntry[] = [
   { href: '/docs', title: 'Start here' },
   { href: '/docs/conventions', title: 'Conventions' },
+  { href: '/docs/archives', title: 'Archives and export' },
   { href: '/docs/evidence', title: 'Evidence' },
   { href: '/docs/reference', title: 'API reference' },
   { href: '/docs/formats', title: 'Formats of an answer' },

@@ -27,14 +27,14 @@ export function DropArea({ onFile, present }: DropAreaProps) {
   const isEmpty = present === null
   return (
     <div {...getRootProps()} className={clsx('border border-dashed bg-sheet px-5', isEmpty ? 'py-12' : 'py-3', isDragActive ? 'border-blue bg-wash' : 'border-soft')}>
-      <input {...getInputProps()} aria-label="URDF file" tabIndex={-1} />
+      <input {...getInputProps()} aria-label="URDF file or archive" tabIndex={-1} />
       <div className={clsx('flex flex-wrap items-center gap-x-6 gap-y-3', isEmpty ? 'flex-col text-center' : 'justify-between')}>
         <p className="min-w-0">
           <span className="block text-15 font-semibold break-all">
-            {isDragActive ? 'Let go to check this file' : isEmpty ? 'Drop a .urdf file here' : <bdi>{present}</bdi>}
+            {isDragActive ? 'Let go to check this file' : isEmpty ? 'Drop a .urdf or .zip file here' : <bdi>{present}</bdi>}
           </span>
           <span className="text-soft">
-            {isEmpty ? 'It is checked at once and stored only when you say so. Up to 8 MiB.' : 'Drop another file to check it in place of this one.'}
+            {isEmpty ? 'It is checked at once and stored only when you say so. A .urdf up to 8 MiB; with its meshes as a .zip up to 64 MiB.' : 'Drop another file to check it in place of this one.'}
           </span>
         </p>
         <Button onClick={open} variant={isEmpty ? 'primary' : 'plain'}>

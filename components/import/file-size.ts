@@ -1,5 +1,10 @@
-/** The largest URDF that the service reads. */
-export const MOST_BYTES = 8 * 1024 * 1024
+const MOST_URDF_BYTES = 8 * 1024 * 1024
+const MOST_ARCHIVE_BYTES = 64 * 1024 * 1024
+
+export const isArchive = (file: File): boolean => /\.zip$/i.test(file.name)
+
+/** The largest file of its kind that the service reads. */
+export const mostBytesOf = (file: File): number => (isArchive(file) ? MOST_ARCHIVE_BYTES : MOST_URDF_BYTES)
 
 /** A size as people read it: "3.1 MiB", "12 KiB", "718 bytes". */
 export function fileSizeText(bytes: number): string {

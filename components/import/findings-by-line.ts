@@ -1,4 +1,5 @@
 import type { Finding } from '@/lib/contract/description'
+import type { Place } from './place'
 
 const GRAVITY = { error: 3, warning: 2, note: 1 } as const
 
@@ -24,3 +25,9 @@ const words = (count: number, one: string): string => `${count} ${one}${count ==
 /** Counts in words: "0 errors · 1 warning · 2 notes". */
 export const findingCountText = ({ error, warning, note }: Record<Finding['severity'], number>): string =>
   `${words(error, 'error')} · ${words(warning, 'warning')} · ${words(note, 'note')}`
+
+/** What a line shows when it is chosen: the first finding on it with its place, or the start of the line. index: null when it has none. */
+export function findingOfLine(findings: readonly Finding[], line: number): { readonly index: number | null; readonly place: Place } {
+  const index = findings.findIndex((finding) => finding.line === line)
+  return { index: index < 0 ? null : index, place: { line, column: findings[index]?.column ?? 1 } }
+}

@@ -2,7 +2,7 @@
 
 import { useVirtualizer } from '@tanstack/react-virtual'
 import clsx from 'clsx'
-import { useRef } from 'react'
+import { useEffect, useRef } from 'react'
 import type { Finding } from '@/lib/contract/description'
 import { FindingItem } from './finding-item'
 
@@ -20,11 +20,15 @@ interface FindingsListProps {
 /** Everything the importer has to say about a file, in the order of its lines; thousands scroll. */
 export function FindingsList(props: FindingsListProps) {
   const { findings, chosen, onChoose, className } = props
+  const list = useRef<HTMLOListElement>(null)
+  useEffect(() => {
+    if (chosen !== null) list.current?.children[chosen]?.scrollIntoView({ block: 'nearest' })
+  }, [chosen])
   if (findings.length > MOST_PLAIN) return <VirtualFindings {...props} />
   return (
-    <ol className={clsx('border-t border-hair', className)} aria-label="Findings">
+    <ol ref={list} className={clsx('border-t border-hair', className)} aria-label="Findings">
       {findings.map((finding, index) => (
-        <li key={index}>
+        <li key={index} className="scroll-mt-14">
           <FindingItem finding={finding} isChosen={index === chosen} onChoose={() => onChoose(index)} />
         </li>
       ))}
@@ -42,6 +46,9 @@ function VirtualFindings({ findings, chosen, onChoose, className }: FindingsList
     overscan: 8,
     initialRect: { width: 400, height: 600 },
   })
+  useEffect(() => {
+    if (chosen !== null) virtual.scrollToIndex(chosen, { align: 'auto' })
+  }, [chosen, virtual])
   return (
     <div ref={scroller} className={clsx('overflow-y-auto border border-soft', className ?? 'max-h-[70vh]')} tabIndex={0} role="region" aria-label={`${findings.length} findings`}>
       <ol className="relative" style={{ height: virtual.getTotalSize() }}>

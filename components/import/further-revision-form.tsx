@@ -12,6 +12,7 @@ import type { Finding } from '@/lib/contract/description'
 import { NewRevisionForm } from '@/lib/contract/model'
 import { Slug } from '@/lib/contract/scalars'
 import { ModelChooser } from './model-chooser'
+import { GeometryField, NO_PROVENANCE, ProvenanceFields, sentProvenance } from './provenance-fields'
 import { revisionHref } from './revision-href'
 import { StoreBar } from './store-bar'
 import { useStoring } from './storing'
@@ -19,11 +20,13 @@ import { TwinNotice } from './twin-notice'
 import { twinOf } from './twin-of'
 import type { Twin } from './twin-of'
 
-const Fields = NewRevisionForm.pick({ note: true }).extend({ model: Slug })
+const Fields = NewRevisionForm.pick({ note: true, serialNumber: true, supplierNote: true }).extend({ model: Slug, geometry: GeometryField })
 
 interface FurtherRevisionFormProps {
   readonly team: string
   readonly file: File
+  /** Of an archive: path of the description that was checked. */
+  readonly entry: string | undefined
   readonly ready: boolean
   /** Slug of the model that the page was opened for. */
   readonly model: string
@@ -31,14 +34,14 @@ interface FurtherRevisionFormProps {
 }
 
 /** Stores the file as a further revision of a model. A file that computes the same numbers is stored only when asked for. */
-export function FurtherRevisionForm({ team, file, ready, model, onFindings }: FurtherRevisionFormProps) {
+export function FurtherRevisionForm({ team, file, entry, ready, model, onFindings }: FurtherRevisionFormProps) {
   const router = useRouter()
-  const { register, handleSubmit, setError, formState } = useForm({ resolver: zodResolver(Fields), defaultValues: { model, note: '' } })
+  const { register, handleSubmit, setError, formState } = useForm({ resolver: zodResolver(Fields), defaultValues: { model, note: '', ...NO_PROVENANCE } })
   const { errors } = formState
   const [twin, setTwin] = useState<Twin | null>(null)
   const storing = useStoring({
     setError,
-    names: ['model', 'note'],
+    names: ['model', 'note', 'serialNumber', 'geometry', 'supplierNote'],
     byCode: { 'model-not-found': 'model' },
     onFindings,
     onRefusal: (refusal) => twinOf(refusal, file, '') !== null,
@@ -47,7 +50,7 @@ export function FurtherRevisionForm({ team, file, ready, model, onFindings }: Fu
   const submit = (allowSame: boolean) =>
     handleSubmit((form) =>
       storing.store(async (signal, sent) => {
-        const ask = { path: { team, model: form.model }, form: { note: form.note, allowSame: allowSame ? 'true' : 'false' }, file, signal } as const
+        const ask = { path: { team, model: form.model }, form: { note: form.note, ...sentProvenance(form), allowSame: allowSame ? 'true' : 'false', entry }, file, signal } as const
         try {
           const revision = await upload('createRevision', ask, sent)
           toast(`Revision ${revision.revision} of ${revision.model.name} is stored as a draft.`)
@@ -70,6 +73,7 @@ export function FurtherRevisionForm({ team, file, ready, model, onFindings }: Fu
     >
       <ModelChooser team={team} error={errors.model?.message} {...register('model')} />
       <TextAreaField label="What changed" hint="Stands in the revision table of the sheet." error={errors.note?.message} {...register('note')} />
+      <ProvenanceFields register={register} errors={errors} />
       {twin !== null && twin.file === file ? (
         <TwinNotice href={revisionHref(team, twin.model, twin.revision)} revision={twin.revision} busy={storing.busy} onStore={() => void submit(true)} />
       ) : null}

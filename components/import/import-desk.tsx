@@ -4,8 +4,11 @@ import { useState } from 'react'
 import { SelectField } from '@/components/ui/select-field'
 import { CheckedFindings } from './checked-findings'
 import { DropArea } from './drop-area'
+import { EntryChooser } from './entry-chooser'
+import { findingOfLine } from './findings-by-line'
 import { FurtherRevisionForm } from './further-revision-form'
 import { ImportSteps } from './import-steps'
+import { meshCountText, MeshTable } from './mesh-table'
 import { NewModelForm } from './new-model-form'
 import type { Place } from './place'
 import { SourceView } from './source-view'
@@ -23,7 +26,7 @@ interface ImportDeskProps {
 /** Import: a file, what the importer has to say about it beside its source, and only then a model or a revision. */
 export function ImportDesk({ team, model }: ImportDeskProps) {
   const { checked, check, cancel, replaceFindings } = useCheckedFile(team)
-  const [chosen, setChosen] = useState<{ file: File; index: number; place: Place } | null>(null)
+  const [chosen, setChosen] = useState<{ file: File; index: number | null; place: Place } | null>(null)
   const [target, setTarget] = useState<'new' | 'further'>(model === null ? 'new' : 'further')
   const [formFile, setFormFile] = useState<File | null>(null)
   const file = checked?.file ?? null
@@ -41,6 +44,9 @@ export function ImportDesk({ team, model }: ImportDeskProps) {
           <p role="alert" className="font-medium text-verm empty:hidden">
             {checked?.failure}
           </p>
+          {checked?.state === 'checked' && checked.descriptions.length > 1 ? (
+            <EntryChooser descriptions={checked.descriptions} chosen={checked.entry} onChoose={(entry) => check(checked.file, entry)} />
+          ) : null}
         </section>
         {checked?.state === 'checked' ? (
           <CheckedFindings
@@ -60,9 +66,10 @@ export function ImportDesk({ team, model }: ImportDeskProps) {
         ) : (
           <SourceView
             text={checked.text}
-            fileName={checked.file.name}
+            fileName={checked.entry ?? checked.file.name}
             findings={checked.findings}
             place={current?.place ?? null}
+            onLine={(line) => setChosen({ file: checked.file, ...findingOfLine(checked.findings, line) })}
             className="h-[70vh] desk:sticky desk:top-16 desk:h-[calc(100dvh-9.5rem)]"
           />
         )}
@@ -72,6 +79,15 @@ export function ImportDesk({ team, model }: ImportDeskProps) {
           <section aria-labelledby="import-structure" className="space-y-3">
             <h2 id="import-structure">What was read</h2>
             <StructureSummary structure={checked.structure} />
+          </section>
+        )}
+        {checked === null || checked.meshes.length === 0 ? null : (
+          <section aria-labelledby="import-meshes" className="space-y-2">
+            <div className="flex flex-wrap items-baseline justify-between gap-x-4">
+              <h2 id="import-meshes">Meshes</h2>
+              <span className="label">{meshCountText(checked.meshes)}</span>
+            </div>
+            <MeshTable meshes={checked.meshes} />
           </section>
         )}
         {formFile === null ? null : (
@@ -91,13 +107,14 @@ export function ImportDesk({ team, model }: ImportDeskProps) {
               <NewModelForm
                 team={team}
                 file={formFile}
+                entry={checked?.entry}
                 ready={ready}
                 suggestion={suggestedName(checked?.structure?.robotName ?? '', formFile.name)}
                 onFindings={replaceFindings}
               />
             </div>
             <div hidden={target !== 'further'}>
-              <FurtherRevisionForm team={team} file={formFile} ready={ready} model={model ?? ''} onFindings={replaceFindings} />
+              <FurtherRevisionForm team={team} file={formFile} entry={checked?.entry} ready={ready} model={model ?? ''} onFindings={replaceFindings} />
             </div>
           </section>
         )}

@@ -1,6 +1,6 @@
 const STEPS = [
   { title: 'Check', text: 'The importer reads the file and says everything it notices, with line and column, what follows from it and what to do. Nothing is stored.' },
-  { title: 'Store', text: 'A file without errors becomes a draft: revision 1 of a new model, or a further revision. It is kept byte for byte.' },
+  { title: 'Store', text: 'A file without errors becomes a draft: revision 1 of a new model, or a further revision. It is kept byte for byte, meshes included.' },
   { title: 'Review', text: 'A second person looks at the sheet and releases it. From then on its numbers can be asked for, and every answer names the revision.' },
 ] as const
 

@@ -13,16 +13,19 @@ import { TextField } from '@/components/ui/text-field'
 import type { Finding } from '@/lib/contract/description'
 import { NewModelForm as Form } from '@/lib/contract/model'
 import { Slug } from '@/lib/contract/scalars'
+import { GeometryField, NO_PROVENANCE, ProvenanceFields, sentProvenance } from './provenance-fields'
 import { revisionHref } from './revision-href'
 import { StoreBar } from './store-bar'
 import { useStoring } from './storing'
 
 /** The contract's form; an empty slug is a slug left out. */
-const Fields = Form.extend({ slug: z.union([z.literal(''), Slug]) })
+const Fields = Form.extend({ slug: z.union([z.literal(''), Slug]), geometry: GeometryField })
 
 interface NewModelFormProps {
   readonly team: string
   readonly file: File
+  /** Of an archive: path of the description that was checked. */
+  readonly entry: string | undefined
   /** False while the file is not fit to be stored. */
   readonly ready: boolean
   readonly suggestion: string
@@ -30,14 +33,14 @@ interface NewModelFormProps {
 }
 
 /** Stores the file as revision 1 of a new model. */
-export function NewModelForm({ team, file, ready, suggestion, onFindings }: NewModelFormProps) {
+export function NewModelForm({ team, file, entry, ready, suggestion, onFindings }: NewModelFormProps) {
   const router = useRouter()
   const { register, handleSubmit, setError, getFieldState, setValue, formState } = useForm({
     resolver: zodResolver(Fields),
-    defaultValues: { name: suggestion, slug: '', note: '' },
+    defaultValues: { name: suggestion, slug: '', note: '', ...NO_PROVENANCE },
   })
   const { errors } = formState
-  const storing = useStoring({ setError, names: ['name', 'slug', 'note'], byCode: { 'slug-taken': 'slug' }, onFindings })
+  const storing = useStoring({ setError, names: ['name', 'slug', 'note', 'serialNumber', 'geometry', 'supplierNote'], byCode: { 'slug-taken': 'slug' }, onFindings })
 
   // Another file brings another suggestion, unless a name was typed.
   useEffect(() => {
@@ -46,7 +49,7 @@ export function NewModelForm({ team, file, ready, suggestion, onFindings }: NewM
 
   const submit = handleSubmit((form) =>
     storing.store(async (signal, sent) => {
-      const { model, revision } = await upload('createModel', { path: { team }, form: { ...form, slug: form.slug || undefined }, file, signal }, sent)
+      const { model, revision } = await upload('createModel', { path: { team }, form: { name: form.name, slug: form.slug || undefined, note: form.note, ...sentProvenance(form), entry }, file, signal }, sent)
       toast(`${model.name} is stored as a draft, revision ${revision.revision}.`)
       router.push(revisionHref(team, model.slug, revision.revision))
     }),
@@ -64,6 +67,7 @@ export function NewModelForm({ team, file, ready, suggestion, onFindings }: NewM
         {...register('slug')}
       />
       <TextAreaField label="Note" hint="Where the file comes from, or what it describes. May be empty." error={errors.note?.message} {...register('note')} />
+      <ProvenanceFields register={register} errors={errors} />
       <StoreBar label="Store as a new model" storing={storing} total={file.size} ready={ready} />
     </form>
   )

@@ -2,23 +2,33 @@
 
 import { useWindowVirtualizer } from '@tanstack/react-virtual'
 import clsx from 'clsx'
-import { useEffect, useRef, useState } from 'react'
+import { useEffect, useImperativeHandle, useRef, useState } from 'react'
+import type { Ref } from 'react'
 import type { Model } from '@/lib/contract/model'
 import { rowToFocus } from './move-focus'
 import { COLUMNS, RegisterRow } from './register-row'
 
+export interface ModelRowsHandle {
+  /** Moves the focus to the first row. */
+  readonly focusFirst: () => void
+}
+
 interface ModelRowsProps {
+  readonly ref: Ref<ModelRowsHandle>
   readonly team: string
   readonly models: readonly Model[]
   readonly hasMore: boolean
   /** Called when the end comes into sight. */
   readonly onEnd: () => void
+  /** Called when a slash is pressed on a row. */
+  readonly onSearch: () => void
 }
 
 const HEADS = ['Model', 'Slug', 'Newest', 'In force', 'Joints', 'Last change'] as const
 
-/** The rows of the register: thousands, of which only those in sight exist. Arrow keys move from row to row. */
-export function ModelRows({ team, models, hasMore, onEnd }: ModelRowsProps) {
+/** The rows of the register: thousands, of which only those in sight exist. Arrow keys move from row to row, and a slash on a row leads
+ *  to the search; only there, because a character that acts everywhere is in the way of whoever dictates (WCAG 2.2, 2.1.4). */
+export function ModelRows({ ref, team, models, hasMore, onEnd, onSearch }: ModelRowsProps) {
   const body = useRef<HTMLDivElement>(null)
   const [top, setTop] = useState(0)
   const virtual = useWindowVirtualizer({
@@ -50,6 +60,8 @@ export function ModelRows({ team, models, hasMore, onEnd }: ModelRowsProps) {
     find(30)
   }
 
+  useImperativeHandle(ref, () => ({ focusFirst: () => focusRow(0) }))
+
   return (
     <div role="table" aria-label="Models" aria-rowcount={hasMore ? -1 : models.length + 1}>
       <div role="rowgroup" className="sticky top-12 z-10 bg-page">
@@ -67,6 +79,10 @@ export function ModelRows({ team, models, hasMore, onEnd }: ModelRowsProps) {
         className="relative border-t border-ink tablet:border-t-0"
         style={{ height: virtual.getTotalSize() }}
         onKeyDown={(event) => {
+          if (event.key === '/' && !event.ctrlKey && !event.metaKey && !event.altKey) {
+            event.preventDefault()
+            return onSearch()
+          }
           const index = rowToFocus(event, models.length)
           if (index === null) return
           event.preventDefault()

@@ -25,15 +25,15 @@ export function RegisterRow({ team, model, index }: RegisterRowProps) {
             href={`/teams/${team}/models/${slug}`}
             data-index={index}
             prefetch={false}
-            className="block truncate font-semibold text-blue after:absolute after:inset-0 hover:underline focus-visible:outline-none focus-visible:after:outline-2 focus-visible:after:-outline-offset-2 focus-visible:after:outline-blue"
+            className="block font-semibold [overflow-wrap:anywhere] text-blue after:absolute after:inset-0 hover:underline focus-visible:outline-none focus-visible:after:outline-2 focus-visible:after:-outline-offset-2 focus-visible:after:outline-blue"
           >
             <bdi>{name}</bdi>
           </Link>
-          <p className="label truncate" dir="auto">
+          <p data-excerpt className="label line-clamp-2 [overflow-wrap:anywhere]" dir="auto">
             {note?.split('\n', 1)[0] ?? '\u00a0'}
           </p>
         </div>
-        <div role="cell" className="num min-w-0 truncate text-soft">
+        <div role="cell" className="num min-w-0 break-all text-soft">
           {slug}
         </div>
         <div role="cell">

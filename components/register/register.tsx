@@ -1,6 +1,6 @@
 'use client'
 
-import { useCallback } from 'react'
+import { useCallback, useRef } from 'react'
 import { sentenceOf } from '@/components/api/refusal'
 import { Notice } from '@/components/shell/notice'
 import { Button } from '@/components/ui/button'
@@ -9,6 +9,7 @@ import { EmptyState } from '@/components/ui/empty-state'
 import { SkeletonRows } from '@/components/ui/skeleton'
 import { useFilters } from './filters'
 import { ModelRows } from './model-rows'
+import type { ModelRowsHandle } from './model-rows'
 import { RegisterFilters } from './register-filters'
 import { useRegister } from './use-register'
 import type { RegisterStart } from './use-register'
@@ -24,6 +25,8 @@ export function Register({ team, start, mayImport }: RegisterProps) {
   const [filters, setFilters] = useFilters()
   const { models, error, hasNextPage, fetchNextPage, isFetching, isFetchingNextPage, isPending, refetch } = useRegister(team, filters, start)
   const isFiltered = filters.query !== '' || filters.status !== null || filters.joints !== null
+  const rows = useRef<ModelRowsHandle>(null)
+  const search = useRef<HTMLInputElement>(null)
   const more = useCallback(() => {
     if (!isFetchingNextPage) void fetchNextPage()
   }, [fetchNextPage, isFetchingNextPage])
@@ -47,7 +50,7 @@ export function Register({ team, start, mayImport }: RegisterProps) {
   }
   return (
     <>
-      <RegisterFilters filters={filters} onChange={setFilters} />
+      <RegisterFilters filters={filters} onChange={setFilters} search={search} onDown={() => rows.current?.focusFirst()} />
       {error === null ? null : (
         <div className="mb-4">
           <Notice title="The list could not be read" tone="error" actions={<Button onClick={() => void refetch()}>Try again</Button>}>
@@ -61,11 +64,11 @@ export function Register({ team, start, mayImport }: RegisterProps) {
       {isPending ? (
         <SkeletonRows rows={8} />
       ) : models.length === 0 ? (
-        <EmptyState title="No model matches" action={<Button onClick={() => void setFilters({ query: null, status: null, joints: null })}>Clear the filters</Button>}>
-          Search looks at names, slugs and notes.
+        <EmptyState title="No model matches" action={<Button onClick={() => setFilters({ query: null, status: null, joints: null })}>Clear the filters</Button>}>
+          Search looks at names, slugs, notes and the robot’s name in the file, whatever the case and the accents.
         </EmptyState>
       ) : (
-        <ModelRows team={team} models={models} hasMore={hasNextPage} onEnd={more} />
+        <ModelRows ref={rows} team={team} models={models} hasMore={hasNextPage} onEnd={more} onSearch={() => search.current?.focus()} />
       )}
       {isFetchingNextPage ? <SkeletonRows rows={2} /> : null}
     </>

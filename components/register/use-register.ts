@@ -2,6 +2,7 @@ import { keepPreviousData, useInfiniteQuery } from '@tanstack/react-query'
 import { useEffect, useState } from 'react'
 import type { Answer } from '@/components/api/ask'
 import { call } from '@/components/api/call'
+import type { Filters } from './filters'
 import { questionOf } from './question'
 import type { RegisterQuestion } from './question'
 
@@ -24,8 +25,8 @@ export interface RegisterStart {
 }
 
 /** The models that match the filters, page after page. */
-export function useRegister(team: string, filters: Readonly<Record<string, unknown>>, start: RegisterStart) {
-  const key = useSettled(JSON.stringify(questionOf(filters)), 150)
+export function useRegister(team: string, filters: Filters, start: RegisterStart) {
+  const key = useSettled(JSON.stringify(questionOf({ ...filters })), 150)
   const list = useInfiniteQuery({
     queryKey: ['register', team, key],
     queryFn: async ({ pageParam, signal }) => {

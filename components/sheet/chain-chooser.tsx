@@ -38,7 +38,7 @@ export function ChainChooser({ href, chains, links, base, tip, refusal }: ChainC
               className="num min-w-0 break-all"
               scroll={false}
             >
-              {chain.base} to {chain.tip}
+              <bdi>{chain.base}</bdi> to <bdi>{chain.tip}</bdi>
             </TextLink>
             <span className="label">
               {chain.joints.length} {chain.joints.length === 1 ? 'joint' : 'joints'}

@@ -11,7 +11,7 @@ export function DrawnCaption({ chain, q }: { readonly chain: Chain; readonly q: 
   const unit = slides === 0 ? units.angle : slides === chain.joints.length ? units.length : `${units.angle}, slides in ${units.length}`
   return (
     <p className="label max-w-xl break-words">
-      Chain <code className="mx-0.5 text-ink">{chain.base}</code> to <code className="mx-0.5 text-ink">{chain.tip}</code>.
+      Chain <code className="mx-0.5 text-ink"><bdi>{chain.base}</bdi></code> to <code className="mx-0.5 text-ink"><bdi>{chain.tip}</bdi></code>.
       {chain.joints.length === 0 ? null : (
         // On the screen the field below says so.
         <span className="hidden print:inline">

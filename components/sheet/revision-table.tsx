@@ -66,7 +66,7 @@ export function RevisionTable({ team, revisions, current, total }: RevisionTable
 }
 
 const Clamped = ({ text }: { readonly text: string }) => (
-  <span className="line-clamp-2 break-words print:line-clamp-none" title={text} dir="auto">
+  <span data-excerpt className="line-clamp-2 [overflow-wrap:anywhere] print:line-clamp-none" title={text} dir="auto">
     {text}
   </span>
 )

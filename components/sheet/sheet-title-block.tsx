@@ -9,7 +9,7 @@ import type { Revision } from '@/lib/contract/model'
 import { actsOf } from './acts'
 
 interface SheetTitleBlockProps {
-  readonly revision: Pick<Revision, 'model' | 'revision' | 'status' | 'fingerprint' | 'importedBy' | 'importedAt' | 'history' | 'counts' | 'fileName'>
+  readonly revision: Pick<Revision, 'model' | 'revision' | 'status' | 'fingerprint' | 'importedBy' | 'importedAt' | 'history' | 'counts' | 'fileName' | 'provenance'>
   /** How many revisions the model has. */
   readonly total: number
 }
@@ -40,12 +40,32 @@ export function SheetTitleBlock({ revision, total }: SheetTitleBlockProps) {
       <TitleCell label="Units">
         {units.angle} · {units.length}
       </TitleCell>
+      <ProvenanceCells provenance={revision.provenance} />
       <TitleCell label="Imported by">
         <By by={revision.importedBy} at={revision.importedAt} />
       </TitleCell>
       <TitleCell label="Submitted by">{submitted === undefined ? <None /> : <By by={submitted.by} at={submitted.at} />}</TitleCell>
       <TitleCell label="Released by" className="max-tablet:col-span-6">{released === undefined ? <None /> : <By by={released.by} at={released.at} />}</TitleCell>
     </TitleBlock>
+  )
+}
+
+/** What was said of where the file comes from; nothing takes no room. */
+function ProvenanceCells({ provenance }: Pick<Revision, 'provenance'>) {
+  if (provenance === undefined) return null
+  const { serialNumber, geometry, supplierNote } = provenance
+  return (
+    <>
+      <TitleCell label="Serial number" span={4}>
+        {serialNumber === undefined ? <None /> : <bdi className="num block text-left break-words">{serialNumber}</bdi>}
+      </TitleCell>
+      <TitleCell label="Geometry">{geometry ?? <None />}</TitleCell>
+      {supplierNote === undefined ? null : (
+        <TitleCell label="Supplier's note" span={6}>
+          <bdi className="block text-left font-normal break-words whitespace-pre-line">{supplierNote}</bdi>
+        </TitleCell>
+      )}
+    </>
   )
 }
 

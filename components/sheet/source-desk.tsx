@@ -4,7 +4,7 @@ import { useQuery } from '@tanstack/react-query'
 import { useEffect, useState } from 'react'
 import { addressOf } from '@/components/api/address'
 import { refusalFrom, sentenceOf, unreachable } from '@/components/api/refusal'
-import { countFindings, findingCountText } from '@/components/import/findings-by-line'
+import { countFindings, findingCountText, findingOfLine } from '@/components/import/findings-by-line'
 import { FindingsList } from '@/components/import/findings-list'
 import { lineOfAnchor } from '@/components/import/place'
 import type { Place } from '@/components/import/place'
@@ -33,16 +33,15 @@ async function readSourceText(address: string, signal: AbortSignal): Promise<str
 /** The stored file with the findings beside it. The address follows the line that is shown: …/source#L112. */
 export function SourceDesk({ path, fileName, findings }: SourceDeskProps) {
   const address = addressOf('getSource', path)
-  const { data: text, error, refetch } = useQuery({ queryKey: ['source', address], queryFn: ({ signal }) => readSourceText(address, signal), staleTime: Infinity })
+  const shown = addressOf('getSource', path, { part: 'description' })
+  const { data: text, error, refetch } = useQuery({ queryKey: ['source', shown], queryFn: ({ signal }) => readSourceText(shown, signal), staleTime: Infinity })
   const [chosen, setChosen] = useState<{ index: number | null; place: Place } | null>(null)
 
   useEffect(() => {
     const follow = () => {
       const line = lineOfAnchor(window.location.hash)
       if (line === null) return
-      const index = findings.findIndex((finding) => finding.line === line)
-      const column = findings[index]?.column ?? 1
-      setChosen({ index: index < 0 ? null : index, place: { line, column } })
+      setChosen(findingOfLine(findings, line))
     }
     follow()
     window.addEventListener('hashchange', follow)
@@ -89,7 +88,10 @@ export function SourceDesk({ path, fileName, findings }: SourceDeskProps) {
             fileName={fileName}
             findings={findings}
             place={chosen?.place ?? null}
-            onLine={(line) => show({ line, column: 1 }, null)}
+            onLine={(line) => {
+              const { place, index } = findingOfLine(findings, line)
+              show(place, index)
+            }}
             className="h-[70vh] desk:sticky desk:top-16 desk:h-[calc(100dvh-11rem)]"
           />
         )}

@@ -14,7 +14,7 @@ const MOST_INDENT = 12
 export function StructureCells({ row: { link, depth, joint } }: { readonly row: StructureRow }) {
   return (
     <>
-      <RowHead className="num max-w-80 min-w-40 truncate whitespace-nowrap" style={{ paddingLeft: 8 + 12 * Math.min(depth, MOST_INDENT) }} title={link}>
+      <RowHead className="num max-w-80 min-w-40 break-all" style={{ paddingLeft: 8 + 12 * Math.min(depth, MOST_INDENT) }} title={link}>
         {depth === 0 ? null : (
           <span aria-hidden className="mr-1 text-soft">
             └
@@ -41,7 +41,7 @@ function JointCells({ joint }: { readonly joint: Joint }) {
   const isBounded = type === 'revolute' || type === 'prismatic'
   return (
     <>
-      <Td className="num max-w-64 truncate whitespace-nowrap">
+      <Td className="num max-w-64 min-w-32 break-all">
         <bdi title={name}>{name}</bdi>
       </Td>
       <Td>

@@ -7,7 +7,7 @@ export function StructurePanel({ rootLink, joints, counts, robotName }: Pick<Rev
     <section aria-labelledby="sheet-structure" className="mt-8">
       <div className="flex flex-wrap items-baseline justify-between gap-x-4">
         <h2 id="sheet-structure">Structure</h2>
-        <span className="label">
+        <span className="label min-w-0 [overflow-wrap:anywhere]">
           {robotName === '' ? 'unnamed robot' : <>robot “<bdi>{robotName}</bdi>”</>} · {counts.links} links · {counts.joints} joints · {counts.independent} independent
         </span>
       </div>

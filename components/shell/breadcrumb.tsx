@@ -12,13 +12,13 @@ export function Breadcrumb({ crumbs }: { readonly crumbs: readonly Crumb[] }) {
     <nav aria-label="Breadcrumb" data-screen-only>
       <ol className="flex flex-wrap gap-x-1 text-soft">
         {crumbs.map((crumb, place) => (
-          <li key={`${place} ${crumb.label}`}>
+          <li key={`${place} ${crumb.label}`} className="min-w-0 [overflow-wrap:anywhere]">
             {place > 0 ? <span aria-hidden>/ </span> : null}
             {crumb.href === undefined ? (
-              <span aria-current="page">{crumb.label}</span>
+              <bdi aria-current="page">{crumb.label}</bdi>
             ) : (
               <Link href={crumb.href} className="hover:text-ink hover:underline">
-                {crumb.label}
+                <bdi>{crumb.label}</bdi>
               </Link>
             )}
           </li>

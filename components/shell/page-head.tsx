@@ -17,9 +17,9 @@ export function PageHead({ title, crumbs, status, detail, actions }: PageHeadPro
     <div className="mb-4">
       {crumbs === undefined ? null : <Breadcrumb crumbs={crumbs} />}
       <div className="mt-1 flex flex-wrap items-center gap-x-4 gap-y-2">
-        <h1>{title}</h1>
+        <h1 className="min-w-0 [overflow-wrap:anywhere]">{title}</h1>
         {status}
-        {detail === undefined ? null : <span className="label">{detail}</span>}
+        {detail === undefined ? null : <span dir="auto" className="label min-w-0 [overflow-wrap:anywhere]">{detail}</span>}
         {actions === undefined ? null : (
           <div data-screen-only className="ml-auto flex flex-wrap gap-3">
             {actions}

@@ -14,7 +14,7 @@ export function Num({ value, digits, unit, className }: NumProps) {
   return (
     <span className={clsx('num whitespace-nowrap', className)}>
       {formatNumber(value, digits)}
-      {unit === undefined ? null : <span className="text-soft"> {unit}</span>}
+      {unit === undefined ? null : <span className="text-soft [word-spacing:-0.25em]"> {unit}</span>}
     </span>
   )
 }

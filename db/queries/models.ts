@@ -1,14 +1,14 @@
-import { and, asc, count, eq, gt, ilike, inArray, isNull, or, sql } from 'drizzle-orm'
+import { and, asc, count, eq, isNull, sql } from 'drizzle-orm'
 import { type Db, schema } from '../client'
+import { refreshEntry, registerPage, type RegisterFilter } from './register'
 
 const { models, revisions } = schema
 
+const latestColumns = { status: revisions.status, fingerprint: revisions.fingerprint, independent: revisions.independent }
+
 const withLatest = (db: Db) =>
   db
-    .select({
-      model: models,
-      latest: { status: revisions.status, fingerprint: revisions.fingerprint, independent: revisions.independent },
-    })
+    .select({ model: models, latest: latestColumns })
     .from(models)
     .innerJoin(revisions, and(eq(revisions.modelId, models.id), eq(revisions.number, models.latest)))
 
@@ -18,37 +18,15 @@ export const findModel = async (db: Db, teamId: string, slug: string) =>
 
 export type ModelRow = NonNullable<Awaited<ReturnType<typeof findModel>>>
 
-export interface RegisterFilter {
-  readonly query?: string
-  readonly status?: (typeof revisions.$inferSelect)['status']
-  readonly joints?: number
-}
-
-const containing = (text: string) => `%${text.replace(/[\\%_]/g, '\\$&')}%`
-
 /** The register in slug order. after: slug of the last row of the page before. */
 export function listModelRows(db: Db, teamId: string, filter: RegisterFilter, limit: number, after?: string) {
-  const pattern = filter.query === undefined ? undefined : containing(filter.query)
-  return withLatest(db)
-    .where(
-      and(
-        eq(models.teamId, teamId),
-        isNull(models.archivedAt),
-        after === undefined ? undefined : gt(models.slug, after),
-        pattern === undefined
-          ? undefined
-          : or(ilike(models.name, pattern), ilike(sql`${models.slug}`, pattern), ilike(models.note, pattern)),
-        filter.joints === undefined ? undefined : eq(revisions.independent, filter.joints),
-        filter.status === undefined
-          ? undefined
-          : inArray(
-              models.id,
-              db.select({ id: revisions.modelId }).from(revisions).where(eq(revisions.status, filter.status)),
-            ),
-      ),
-    )
-    .orderBy(asc(models.slug))
-    .limit(limit)
+  const page = registerPage(db, teamId, filter, limit, after).as('page')
+  return db
+    .select({ model: models, latest: latestColumns })
+    .from(page)
+    .innerJoin(models, eq(models.id, page.modelId))
+    .innerJoin(revisions, and(eq(revisions.modelId, models.id), eq(revisions.number, models.latest)))
+    .orderBy(asc(page.slug))
 }
 
 /** Lets one transaction at a time derive slugs in this team, so that of many imports under one name none goes without. */
@@ -70,14 +48,16 @@ export async function insertModel(db: Db, model: typeof models.$inferInsert) {
 }
 
 /** Changes a model that is still at `version`; false when it is not. */
-export async function updateModel(db: Db, id: string, version: number, change: Partial<typeof models.$inferInsert>, now: Date) {
-  const rows = await db
-    .update(models)
-    .set({ ...change, changedAt: now, version: version + 1 })
-    .where(and(eq(models.id, id), eq(models.version, version)))
-    .returning({ id: models.id })
-  return rows.length === 1
-}
+export const updateModel = (db: Db, id: string, version: number, change: Partial<typeof models.$inferInsert>, now: Date): Promise<boolean> =>
+  db.transaction(async (inside) => {
+    const rows = await inside
+      .update(models)
+      .set({ ...change, changedAt: now, version: version + 1 })
+      .where(and(eq(models.id, id), eq(models.version, version)))
+      .returning({ id: models.id })
+    if (rows.length === 1) await refreshEntry(inside, id)
+    return rows.length === 1
+  })
 
 /** Takes the model for the rest of the transaction, so that revisions are numbered and released one after the other. */
 export async function lockModel(db: Db, id: string) {

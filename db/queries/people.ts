@@ -1,4 +1,4 @@
-import { and, asc, count, eq, isNull, sql } from 'drizzle-orm'
+import { and, asc, count, eq, inArray, isNull, sql } from 'drizzle-orm'
 import { type Db, schema } from '../client'
 
 const { members, sessions, teams, users } = schema
@@ -33,6 +33,15 @@ export async function findMembership(db: Db, userId: string, teamSlug: string) {
     .limit(1)
   return row ?? null
 }
+
+/** The people of a team with one of these roles, by name. */
+export const listPeopleWithRole = (db: Db, teamId: string, roles: readonly (typeof members.$inferSelect)['role'][]) =>
+  db
+    .select({ id: users.id, name: users.name })
+    .from(members)
+    .innerJoin(users, eq(users.id, members.userId))
+    .where(and(eq(members.teamId, teamId), inArray(members.role, [...roles])))
+    .orderBy(asc(users.name), asc(users.id))
 
 export const listMemberships = (db: Db, userId: string) =>
   db

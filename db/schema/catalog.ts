@@ -10,12 +10,15 @@ const bytes = customType<{ data: Uint8Array; driverData: Uint8Array }>({
 })
 
 /** Text in code point order, so that lists and cursors read the same on every PostgreSQL, whatever its locale. */
-const plainText = customType<{ data: string; driverData: string }>({ dataType: () => 'text collate "C"' })
+export const plainText = customType<{ data: string; driverData: string }>({ dataType: () => 'text collate "C"' })
+
+export const geometryEnum = ['nominal', 'calibrated'] as const
 
 export const statusEnum = ['draft', 'in-review', 'released', 'superseded', 'withdrawn'] as const
 
 /** A robot description under a name, with numbered revisions. latest and released repeat what `revisions` says, so that
- *  the register is one join; both are changed in the transaction that changes the revision. */
+ *  the register is one join; both are changed in the transaction that changes the revision. What else the register is asked
+ *  for stands in `register_entries`. */
 export const models = pgTable(
   'models',
   {
@@ -48,8 +51,14 @@ export const revisions = pgTable(
     fingerprint: text('fingerprint').notNull(),
     sourceDigest: text('source_digest').notNull(),
     fileName: text('file_name').notNull(),
+    /** Path of the description in the archive that was uploaded; null when it was sent alone. */
+    entry: text('entry'),
     robotName: text('robot_name').notNull(),
     note: text('note'),
+    /** What was said of where the file comes from. */
+    serialNumber: text('serial_number'),
+    geometry: text('geometry', { enum: geometryEnum }),
+    supplierNote: text('supplier_note'),
     independent: integer('independent').notNull(),
     description: jsonb('description').$type<Description>().notNull(),
     findings: jsonb('findings').$type<readonly Finding[]>().notNull(),
@@ -62,10 +71,13 @@ export const revisions = pgTable(
     unique('revisions_model_number').on(table.modelId, table.number),
     index('revisions_model_fingerprint').on(table.modelId, table.fingerprint),
     index('revisions_in_review').on(table.modelId).where(sql`${table.status} = 'in-review'`),
+    // A person's own drafts, on the desk.
+    index('revisions_drafts').on(table.importedBy, table.importedAt).where(sql`${table.status} = 'draft'`),
   ],
 )
 
-/** The file as uploaded, byte for byte, apart from the rows that lists read. */
+/** The description byte for byte, apart from the rows that lists read. An archive that it came in is in the file storage under
+ *  the revision's source digest. */
 export const sources = pgTable('sources', {
   revisionId: uuid('revision_id').primaryKey().references(() => revisions.id),
   bytes: bytes('bytes').notNull(),
@@ -76,6 +88,8 @@ export const transitions = pgTable(
   'transitions',
   {
     revisionId: uuid('revision_id').notNull().references(() => revisions.id),
+    /** The team of the revision's model, so that its latest changes are one stretch of an index. */
+    teamId: uuid('team_id').notNull().references(() => teams.id),
     ordinal: integer('ordinal').notNull(),
     status: text('status', { enum: statusEnum }).notNull(),
     /** Name at the time of the act, kept as it was. */
@@ -84,5 +98,8 @@ export const transitions = pgTable(
     at: instant('at').notNull().defaultNow(),
     comment: text('comment'),
   },
-  (table) => [primaryKey({ columns: [table.revisionId, table.ordinal] })],
+  (table) => [
+    primaryKey({ columns: [table.revisionId, table.ordinal] }),
+    index('transitions_latest').on(table.teamId, table.at, table.ordinal),
+  ],
 )

@@ -1,5 +1,6 @@
 import type { Db } from '@/db/client'
 import { findKey, type KeyRow } from '@/db/queries/keys'
+import { findMesh, type MeshRow } from '@/db/queries/meshes'
 import { findModel, type ModelRow } from '@/db/queries/models'
 import { findMembership } from '@/db/queries/people'
 import { findReferencePoses, type ReferencePosesRow } from '@/db/queries/reference-poses'
@@ -14,6 +15,8 @@ export interface Located {
   model: ModelRow
   revision: RevisionRow
   set: ReferencePosesRow
+  /** The mesh at a path in the archive that the revision came in. */
+  path: MeshRow
   key: KeyRow
 }
 export type Parameter = keyof Located
@@ -22,6 +25,8 @@ export type Parameter = keyof Located
 const NAME = /^[0-9A-Za-z-]{1,64}$/
 
 const LARGEST_NUMBER = 2 ** 31 - 1
+
+const MESH_PATH = /^[^\p{Cc}\p{Cs}]{1,1024}$/u
 
 /** The number in a path; 0 where it is none that the database can hold. */
 function numberIn(name: string): number {
@@ -48,7 +53,7 @@ export async function locateRevision(db: Db, { model }: ModelRow, name: string):
 }
 
 /** Finds what the parameters of a path name, in the caller's team only.
- *  Fails with team-, model-, revision-, reference-poses- or key-not-found, or nothing-released. */
+ *  Fails with team-, model-, revision-, reference-poses-, mesh- or key-not-found, or nothing-released. */
 export async function locate(
   db: Db,
   who: Identity,
@@ -56,7 +61,7 @@ export async function locate(
 ): Promise<{ caller: Caller; at: Partial<Located> }> {
   const caller = await enterTeam(db, who, parameters.team ?? '')
   const at: Partial<Located> = { team: caller.team }
-  const { model, revision, set, key } = parameters
+  const { model, revision, set, path, key } = parameters
   if (model !== undefined) {
     if (!NAME.test(model)) fail('model-not-found')
     at.model = (await findModel(db, caller.team.id, model)) ?? fail('model-not-found')
@@ -64,6 +69,10 @@ export async function locate(
     if (revision !== undefined) at.revision = await locateRevision(db, at.model, revision)
     if (at.revision !== undefined && set !== undefined) {
       at.set = (await findReferencePoses(db, at.revision.id, numberIn(set))) ?? fail('reference-poses-not-found')
+    }
+    if (at.revision !== undefined && path !== undefined) {
+      // Only paths that are recorded are known, so that none can lead anywhere else.
+      at.path = (MESH_PATH.test(path) ? await findMesh(db, at.revision.id, path) : null) ?? fail('mesh-not-found')
     }
   }
   if (key !== undefined) {

@@ -6,7 +6,7 @@ const MOST_IDS = 10_000
 
 /** A function that notes the use of an id, at most once in `everyMs` for each. It is not awaited: a call is never held up by
  *  the note of its own use, and a note that fails is only logged. */
-export function createUseNoter(what: 'key' | 'session', everyMs: number, write: (db: Db, id: string, at: Date) => Promise<unknown>) {
+export function createUseNoter(what: 'key' | 'revision' | 'session', everyMs: number, write: (db: Db, id: string, at: Date) => Promise<unknown>) {
   const noted = new Map<string, number>()
   return (id: string): void => {
     const now = Date.now()

@@ -22,6 +22,9 @@ export const PERMISSIONS = {
   createRevision: { role: 'engineer', scope: 'catalog:write' },
   getRevision: { role: 'reader', scope: 'catalog:read' },
   getSource: { role: 'reader', scope: 'catalog:read' },
+  getMesh: { role: 'reader', scope: 'catalog:read' },
+  exportModel: { role: 'reader', scope: 'catalog:read' },
+  listUses: { role: 'reader', scope: 'catalog:read' },
   getFindings: { role: 'reader', scope: 'catalog:read' },
   // What each change of status needs beyond this stands in lib/catalog/transition-table.ts.
   transitionRevision: { role: 'engineer', scope: null },

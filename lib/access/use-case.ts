@@ -42,7 +42,7 @@ export type AnswerBody<N extends OperationName> = Operations[N]['answer'] extend
     ? Omit<z.input<S>, 'results'> & { readonly results: Series<z.input<I>> }
     : z.input<S>
   : Operations[N]['answer'] extends { mediaType: string }
-    ? Uint8Array
+    ? Uint8Array | ReadableStream<Uint8Array>
     : undefined
 
 /** What a use-case gives back: the body and what HTTP says beside it. */
@@ -54,6 +54,8 @@ export interface Answer<T> {
   readonly location?: string
   /** The JSON of the body, parsed by the operation's schema and written elsewhere; the body itself is left out then. */
   readonly written?: string
+  /** Of bytes that are of another type than the operation's usual one: one of its alsoMediaTypes. */
+  readonly mediaType?: string
   /** The name under which bytes are saved. */
   readonly fileName?: string
 }

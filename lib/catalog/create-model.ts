@@ -6,6 +6,7 @@ import { fail } from '@/lib/errors'
 import { commonStart, deriveSlug, freeSlug } from './derive-slug'
 import { presentModel } from './present-model'
 import { presentRevision } from './present-revision'
+import { keepFiles } from './keep-files'
 import { acceptUpload } from './read-upload'
 import { storeRevision } from './store-revision'
 
@@ -28,12 +29,13 @@ async function insertUnderSlug(db: Db, teamId: string, name: string, slug: strin
 
 /** Imports a file as revision 1 of a new model. */
 export const createModel: UseCase<'createModel'> = async (caller, { form, file }) => {
-  const upload = await acceptUpload(file)
+  const upload = await acceptUpload(file, form.entry)
+  await keepFiles(upload)
   const db = await getDb()
   const now = new Date()
   const { slug } = await db.transaction(async (inside) => {
     const model = await insertUnderSlug(inside, caller.team.id, form.name, form.slug, form.note, now)
-    await storeRevision(inside, caller, { modelId: model.id, number: 1, upload, note: undefined, now })
+    await storeRevision(inside, caller, { modelId: model.id, number: 1, upload, note: undefined, provenance: form, now })
     return model
   })
   const model = (await findModel(db, caller.team.id, slug))!

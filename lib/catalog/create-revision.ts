@@ -3,13 +3,15 @@ import { lockModel, setModel } from '@/db/queries/models'
 import { findRevision, findRevisionByFingerprint } from '@/db/queries/revisions'
 import type { UseCase } from '@/lib/access/use-case'
 import { fail } from '@/lib/errors'
+import { keepFiles } from './keep-files'
 import { presentRevision } from './present-revision'
 import { acceptUpload } from './read-upload'
 import { storeRevision } from './store-revision'
 
 /** Imports a file as a further revision of a model. */
 export const createRevision: UseCase<'createRevision'> = async (caller, { at, form, file }) => {
-  const upload = await acceptUpload(file)
+  const upload = await acceptUpload(file, form.entry)
+  await keepFiles(upload)
   const { id: modelId } = at.model.model
   const db = await getDb()
   const number = await db.transaction(async (inside) => {
@@ -20,7 +22,7 @@ export const createRevision: UseCase<'createRevision'> = async (caller, { at, fo
       fail('same-content', `Revision ${twin.number} computes the same numbers. Nothing was stored.`, { members: { twin: twin.number } })
     }
     const next = model.latest + 1
-    await storeRevision(inside, caller, { modelId, number: next, upload, note: form.note || undefined, now })
+    await storeRevision(inside, caller, { modelId, number: next, upload, note: form.note || undefined, provenance: form, now })
     await setModel(inside, modelId, { latest: next }, now)
     return next
   })

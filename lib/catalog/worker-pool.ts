@@ -1,7 +1,7 @@
 import type { Worker } from 'node:worker_threads'
 
 /** What came of a question: its answer, or why none will come. error: what a worker that failed has said. */
-export type Outcome<A> = { readonly answer: A } | { readonly givenUp: 'time' | 'memory' | 'failure' | 'stopped'; readonly error?: unknown }
+export type Outcome<A> = { readonly answer: A } | { readonly givenUp: 'time' | 'memory' | 'failure' | 'stopped' | 'crowded'; readonly error?: unknown }
 
 export interface WorkerPool<Q, A> {
   /** Puts a question to a worker, in turn behind those that came before. Never fails. */
@@ -15,6 +15,8 @@ export interface PoolOptions {
   readonly spawn: () => Worker
   /** As many questions are answered at a time; the others wait. */
   readonly size: number
+  /** As many questions may wait; more are given up at once, because each holds its file in memory. */
+  readonly queue: number
   /** Longer than this no worker may take over one question. ms */
   readonly limitMs: number
   /** A worker without a question is ended after this. ms */
@@ -30,7 +32,7 @@ const isOutOfMemory = (error: unknown): boolean => (error as NodeJS.ErrnoExcepti
 
 /** A pool of threads for work that would hold up the event loop. A worker that takes too long, needs too much memory or fails is
  *  replaced, and costs nothing but its own question. Idle workers do not keep the process from ending. */
-export function createWorkerPool<Q, A>({ spawn, size, limitMs, idleMs }: PoolOptions): WorkerPool<Q, A> {
+export function createWorkerPool<Q, A>({ spawn, size, queue, limitMs, idleMs }: PoolOptions): WorkerPool<Q, A> {
   const waiting: Task<Q, A>[] = []
   const idle: { readonly worker: Worker; readonly timer: NodeJS.Timeout }[] = []
   const busy = new Map<Worker, (outcome: Outcome<A>) => void>()
@@ -82,6 +84,7 @@ export function createWorkerPool<Q, A>({ spawn, size, limitMs, idleMs }: PoolOpt
     ask: (question) =>
       new Promise((settle) => {
         if (hasEnded) return settle({ givenUp: 'stopped' })
+        if (waiting.length >= queue) return settle({ givenUp: 'crowded' })
         waiting.push({ question, settle })
         next()
       }),

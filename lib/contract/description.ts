@@ -1,4 +1,5 @@
 import { z } from 'zod'
+import { MeshReference } from './mesh'
 import { Digest, Triple } from './scalars'
 
 export const Severity = z.enum(['error', 'warning', 'note'])
@@ -74,4 +75,15 @@ export const Structure = z.strictObject(structureFields).meta({ id: 'Structure' 
 export type Structure = z.infer<typeof Structure>
 
 /** What the check of an import answers. structure: left out when a finding is an error. */
-export const CheckedImport = z.strictObject({ findings: z.array(Finding), structure: Structure.optional() })
+export const CheckedImport = z.strictObject({
+  findings: z.array(Finding),
+  structure: Structure.optional(),
+  meshes: z.array(MeshReference).optional().meta({ description: 'Where each mesh that the description refers to is found; left out when there are none.' }),
+  archive: z
+    .strictObject({
+      entry: z.string().optional().meta({ description: 'Path of the description that was read.' }),
+      descriptions: z.array(z.string()).meta({ description: 'Paths of all descriptions in it. Of several one is chosen by the form field "entry".' }),
+    })
+    .optional()
+    .meta({ description: 'Of an archive only.' }),
+})

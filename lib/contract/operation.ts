@@ -23,6 +23,8 @@ export interface Operation {
     readonly schema?: z.ZodType
     /** Set when the answer is bytes and not JSON. */
     readonly mediaType?: string
+    /** Other types that such an answer may have. */
+    readonly alsoMediaTypes?: readonly string[]
   }
   /** The `results` of the answer are many: each is worked out, parsed with `item` and written by itself, in slices. */
   readonly item?: z.ZodObject

@@ -21,6 +21,9 @@ const readable = (most: number) =>
 
 export const Name = readable(120).min(1, 'give a name')
 
+/** As it stands on the type plate. */
+export const SerialNumber = readable(100)
+
 export const Note = z
   .string()
   .trim()

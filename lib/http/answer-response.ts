@@ -142,6 +142,8 @@ export async function answerResponse(operation: Operation, answer: Answer<unknow
     if (answer.fileName !== undefined) headers.set('content-disposition', attachment(`${answer.fileName}.${context.mediaType === CSV_TYPE ? 'csv' : 'json'}`))
     return new Response(streamOf(written.chunks), { status, headers })
   }
+  // Bytes have the type that they have, whichever of those on offer was asked for.
+  headers.set('content-type', answer.mediaType ?? operation.answer.mediaType)
   headers.set('content-disposition', attachment(answer.fileName ?? 'file'))
   headers.set('content-security-policy', "sandbox; default-src 'none'")
   return new Response(answer.body as BodyInit, { status, headers })

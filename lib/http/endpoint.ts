@@ -1,6 +1,7 @@
 import type { NextRequest } from 'next/server'
 import { getDb } from '@/db/client'
 import { locate, type Parameter } from '@/lib/access/locate'
+import { noteRevisionUse } from '@/lib/access/note-revision-use'
 import { permit } from '@/lib/access/permissions'
 import type { Answer, Ask, UseCase } from '@/lib/access/use-case'
 import type { Operation } from '@/lib/contract/operation'
@@ -53,10 +54,14 @@ async function readParts(operation: Operation, request: NextRequest) {
 
 /** The formats that the operation answers in, the usual one first. */
 const offeredBy = ({ answer, records, table }: Operation): readonly [string, ...string[]] =>
-  records !== undefined ? RECORD_MEDIA_TYPES : [answer.mediaType ?? JSON_TYPE, ...(table === undefined ? [] : [CSV_TYPE])]
+  records !== undefined ? RECORD_MEDIA_TYPES : [answer.mediaType ?? JSON_TYPE, ...(answer.alsoMediaTypes ?? []), ...(table === undefined ? [] : [CSV_TYPE])]
 
 /** Of a table the query may say what a browser's link cannot: `?format=`. */
 const FORMATS: Readonly<Record<string, string>> = { json: JSON_TYPE, csv: CSV_TYPE }
+
+/** The names in a path; one of several parts comes with '/' between them. */
+const namesIn = (params: Record<string, string | string[]>) =>
+  Object.fromEntries(Object.entries(params).map(([name, value]) => [name, Array.isArray(value) ? value.join('/') : value])) as Partial<Record<Parameter, string>>
 
 /** A use-case as a route handler. The order of checks is the contract's:
  *  401, 404, 403, 406, 415, 413, 400, 422, 428, 412, and what the use-case itself refuses; that binary records have the length
@@ -69,7 +74,7 @@ export function endpoint<N extends OperationName>(name: N, useCase: UseCase<N>):
     let response: Response
     let by: string | undefined
     try {
-      const parameters = (await params) as Partial<Record<Parameter, string>>
+      const parameters = namesIn(await params)
       const who = await authenticate(request)
       // The embedded database computes in this thread: what one stage asks of it and what the next does are two turns.
       await passTurn()
@@ -78,6 +83,7 @@ export function endpoint<N extends OperationName>(name: N, useCase: UseCase<N>):
       await passTurn()
       checkOrigin(who, operation.method, request.headers)
       permit(caller, name)
+      noteRevisionUse(caller, at)
       const accepted = chooseMediaType(request.headers, offeredBy(operation))
       const parts = await readParts(operation, request)
       checkIfMatch(operation, at, request.headers)
@@ -85,6 +91,8 @@ export function endpoint<N extends OperationName>(name: N, useCase: UseCase<N>):
       const { format } = (parts.query ?? {}) as { format?: string }
       const mediaType = operation.table !== undefined && format !== undefined ? FORMATS[format]! : accepted
       const answer: Answer<unknown> = await useCase(caller, { at, ...parts } as Ask<N>)
+      // Of which type stored bytes are is known only now.
+      if (answer.mediaType !== undefined) chooseMediaType(request.headers, [answer.mediaType])
       response = await answerResponse(operation, answer, {
         request: mark,
         mediaType,

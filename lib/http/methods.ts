@@ -12,7 +12,8 @@ export function methods(given: Partial<Record<Method, RouteHandler>>): Record<Me
   const get = handlers.get('GET')
   if (get !== undefined) {
     handlers.set('HEAD', async (request, context) => {
-      const { status, headers } = await get(request, context)
+      const { status, headers, body } = await get(request, context)
+      void body?.cancel()
       return new Response(null, { status, headers })
     })
   }

@@ -8,11 +8,12 @@ const MEBIBYTE = 1024 * 1024
 const MOST_JSON_BYTES = 8 * MEBIBYTE
 const MOST_RECORD_BYTES = 64 * MEBIBYTE
 const MOST_URDF_BYTES = 8 * MEBIBYTE
+const MOST_ARCHIVE_BYTES = 64 * MEBIBYTE
 /** What the text fields and the boundaries of a multipart body may take beside the file. */
 const MULTIPART_ROOM = 64 * 1024
 
 /** So much of a refused body is still taken and thrown away, because many clients read the answer only when they have sent all. */
-const MOST_DISCARDED = 64 * MEBIBYTE
+const MOST_DISCARDED = 80 * MEBIBYTE
 
 /** Takes what still comes of a refused body. */
 async function discard(reader: ReadableStreamDefaultReader<Uint8Array>): Promise<void> {
@@ -48,8 +49,9 @@ async function joined(pieces: readonly Uint8Array[], length: number): Promise<Ui
 }
 
 /** Reads the body up to `most` bytes: fails with too-large. A body that says its length is taken to its end first, so that a
- *  client that closes the connection behind it gets its answer; one that does not is answered while it still sends. */
-async function readBytes(request: Request, most: number, what: string): Promise<Uint8Array> {
+ *  client that closes the connection behind it gets its answer; one that does not is answered while it still sends. mayGoOn: whether
+ *  what has come so far may be as long as it is. */
+async function readBytes(request: Request, most: number, what: string, mayGoOn: (pieces: readonly Uint8Array[], length: number) => boolean = () => true): Promise<Uint8Array> {
   if (request.body === null) return new Uint8Array()
   const reader = request.body.getReader()
   const tooLarge = () => fail('too-large', `${what} may have at most ${most} bytes. Nothing was stored.`)
@@ -64,11 +66,12 @@ async function readBytes(request: Request, most: number, what: string): Promise<
     const { done, value } = await reader.read()
     if (done) return joined(pieces, length)
     length += value.length
-    if (length > most) {
-      void discard(reader)
+    pieces.push(value)
+    if (length > most || !mayGoOn(pieces, length)) {
+      const discarded = discard(reader)
+      if (declared > 0 && declared <= MOST_DISCARDED) await discarded
       tooLarge()
     }
-    pieces.push(value)
   }
 }
 
@@ -111,9 +114,19 @@ async function decodeUtf8(bytes: Uint8Array): Promise<string> {
 /** The body as bytes. Fails with too-large. */
 export const readRecordBytes = (request: Request): Promise<Uint8Array> => readBytes(request, MOST_RECORD_BYTES, 'A body of records')
 
+const isArchiveName = (name: string): boolean => /\.zip$/i.test(name)
+
+/** Only a body that announces an archive, by the name of its file at the head of the part, may be longer than a URDF is. */
+function mayBeAsLong(pieces: readonly Uint8Array[], length: number): boolean {
+  if (length <= MOST_URDF_BYTES + MULTIPART_ROOM) return true
+  let head = ''
+  for (let i = 0; i < pieces.length && head.length < MULTIPART_ROOM; i++) head += Buffer.from(pieces[i]!.subarray(0, MULTIPART_ROOM)).toString('latin1')
+  return /\bfilename\*?=[^\r\n]*\.zip"?[\r\n;]/i.test(head.slice(0, MULTIPART_ROOM))
+}
+
 /** The multipart body: its one file and its text fields. Fails with too-large, malformed-body or invalid-request. */
 export async function readForm(request: Request): Promise<{ fields: Record<string, string>; file: UploadedFile }> {
-  const bytes = await readBytes(request, MOST_URDF_BYTES + MULTIPART_ROOM, 'The upload')
+  const bytes = await readBytes(request, MOST_ARCHIVE_BYTES + MULTIPART_ROOM, 'The upload', mayBeAsLong)
   let data: FormData
   try {
     data = await new Response(bytes as BodyInit, { headers: { 'content-type': request.headers.get('content-type') ?? '' } }).formData()
@@ -136,6 +149,7 @@ export async function readForm(request: Request): Promise<{ fields: Record<strin
   if (file === undefined) {
     fail('invalid-request', undefined, { errors: [{ pointer: '/form/file', detail: 'is missing: send the URDF as a file in the part named "file"' }] })
   }
-  if (file.bytes.length > MOST_URDF_BYTES) fail('too-large', `A URDF may have at most ${MOST_URDF_BYTES} bytes; this one has ${file.bytes.length}.`)
+  const [what, most] = isArchiveName(file.name) ? ['An archive', MOST_ARCHIVE_BYTES] : ['A URDF', MOST_URDF_BYTES]
+  if (file.bytes.length > most) fail('too-large', `${what} may have at most ${most} bytes; this one has ${file.bytes.length}.`)
   return { fields, file }
 }

@@ -3,7 +3,7 @@ import { log } from '@/lib/log'
 import type { RequestMark } from './problem-response'
 import { requestId } from './request-id'
 
-export type RouteHandler = (request: NextRequest, context: { params: Promise<Record<string, string>> }) => Promise<Response>
+export type RouteHandler = (request: NextRequest, context: { params: Promise<Record<string, string | string[]>> }) => Promise<Response>
 
 /** A handler that is no operation of the contract: its answer carries X-Request-Id and is logged all the same. */
 export const marked =

@@ -1,11 +1,7 @@
 import type { KeyRow } from '@/db/queries/keys'
+import { stateOf } from '@/lib/access/key-state'
 import { keyPrefix } from '@/lib/access/key-text'
 import type { Key, Scope } from '@/lib/contract/key-operations'
-
-function stateOf(revokedAt: Date | null, expiresAt: Date | null): Key['state'] {
-  if (revokedAt !== null) return 'revoked'
-  return expiresAt !== null && expiresAt.getTime() <= Date.now() ? 'expired' : 'active'
-}
 
 /** A key as the contract shows it: never the key itself. */
 export function presentKey({ key, createdByName }: KeyRow): Key {
@@ -15,7 +11,7 @@ export function presentKey({ key, createdByName }: KeyRow): Key {
     prefix: keyPrefix(key.id),
     label: key.label,
     scopes: key.scopes as Scope[],
-    state: stateOf(key.revokedAt, key.expiresAt),
+    state: stateOf(key),
     createdAt: key.createdAt.toISOString(),
     createdBy: createdByName,
     ...Object.fromEntries(Object.entries(optional).flatMap(([name, at]) => (at === null ? [] : [[name, at.toISOString()]]))),

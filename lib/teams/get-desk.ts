@@ -1,10 +1,11 @@
 import { getDb } from '@/db/client'
 import { listExpiringKeys } from '@/db/queries/keys'
 import { countModels } from '@/db/queries/models'
-import { listLatestTransitions, listRevisionsInStatus, listTransitions } from '@/db/queries/revisions'
+import { listDrafts, listLatestTransitions } from '@/db/queries/revisions'
 import type { Caller } from '@/lib/access/caller'
 import { may } from '@/lib/access/permissions'
 import type { Status } from '@/lib/contract/scalars'
+import { getReviewQueue, type ReviewQueue } from './review-queue'
 
 const MOST_LINES = 20
 /** How long ahead an expiring key is shown. */
@@ -18,8 +19,7 @@ interface RevisionLine {
 
 /** A team's first page: what waits for whom. */
 export interface Desk {
-  /** In review. own: the caller imported or submitted it, so that under four eyes somebody else has to release it. */
-  readonly reviews: readonly (RevisionLine & { readonly submittedBy: string; readonly at: string; readonly own: boolean })[]
+  readonly queue: ReviewQueue
   /** Drafts that the caller imported. */
   readonly drafts: readonly (RevisionLine & { readonly importedAt: string })[]
   /** Keys that expire within EXPIRY_NOTICE_DAYS, for those who may see keys. */
@@ -34,26 +34,15 @@ export async function getDesk(caller: Caller): Promise<Desk> {
   const teamId = caller.team.id
   const now = new Date()
   const until = new Date(now.getTime() + EXPIRY_NOTICE_DAYS * 86_400_000)
-  const [inReview, drafts, keys, latest, counts] = await Promise.all([
-    listRevisionsInStatus(db, teamId, 'in-review', MOST_LINES),
-    listRevisionsInStatus(db, teamId, 'draft', MOST_LINES, caller.userId),
+  const [queue, drafts, keys, latest, counts] = await Promise.all([
+    getReviewQueue(db, caller, MOST_LINES),
+    listDrafts(db, teamId, caller.userId, MOST_LINES),
     may(caller, 'listKeys') ? listExpiringKeys(db, teamId, now, until) : [],
     listLatestTransitions(db, teamId, MOST_LINES),
     countModels(db, teamId),
   ])
-  const histories = await listTransitions(db, inReview.map(({ id }) => id))
   return {
-    reviews: inReview.map((row) => {
-      const submission = histories.get(row.id)?.findLast(({ status }) => status === 'in-review')
-      return {
-        model: row.slug,
-        name: row.name,
-        revision: row.number,
-        submittedBy: submission?.byName ?? '',
-        at: (submission?.at ?? row.importedAt).toISOString(),
-        own: row.importedBy === caller.userId || submission?.byUser === caller.userId,
-      }
-    }),
+    queue,
     drafts: drafts.map((row) => ({ model: row.slug, name: row.name, revision: row.number, importedAt: row.importedAt.toISOString() })),
     keys: keys.map(({ id, label, expiresAt }) => ({ id, label, expiresAt: expiresAt!.toISOString() })),
     latest: latest.map(({ slug, name, number, transition }) => ({

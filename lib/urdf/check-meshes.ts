@@ -1,13 +1,14 @@
 import type { DraftLink } from '@/lib/urdf/read-link'
 import { waitsForXacro } from '@/lib/urdf/read-value'
 import type { Report } from '@/lib/urdf/report'
-import { leadsOutside, resolveMesh } from '@/lib/urdf/resolve-mesh'
+import { leadsOutside, meshResolver } from '@/lib/urdf/resolve-mesh'
 import { quoted } from '@/lib/urdf/wording'
 
 /** Reports the meshes that are not to be had, each file at its first use: those that lead out of the upload, and those that it does
  *  not have. files: the paths in the upload; null when it is a single file, of which one finding says that it has none. */
 export function checkMeshes(report: Report, links: readonly DraftLink[], files: readonly string[] | null): void {
   const seen = new Set<string>()
+  const resolve = files === null ? null : meshResolver(files)
   const missing = links.flatMap(({ label, meshes }) =>
     meshes.flatMap(({ value, valueAt }) => {
       if (seen.has(value) || waitsForXacro(value)) return []
@@ -16,7 +17,7 @@ export function checkMeshes(report: Report, links: readonly DraftLink[], files: 
         report.add('mesh-outside', valueAt, `The mesh ${quoted(value)} lies outside the upload; its path is never followed, and the shape is not shown.`, { element: label })
         return []
       }
-      return files !== null && resolveMesh(value, files) !== null ? [] : [{ label, value, valueAt }]
+      return resolve !== null && resolve(value) !== null ? [] : [{ label, value, valueAt }]
     }),
   )
   if (files !== null) {

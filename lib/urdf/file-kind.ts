@@ -3,7 +3,7 @@ const KINDS: readonly (readonly [kind: string, starts: readonly string[]])[] = [
   ['a JPEG picture', ['\xff\xd8\xff']],
   ['a GIF picture', ['GIF8']],
   ['a PDF document', ['%PDF']],
-  ['a zip archive (packages of several files are not read yet)', ['PK\x03\x04', 'PK\x05\x06']],
+  ['a zip archive, and its name does not end in .zip', ['PK\x03\x04', 'PK\x05\x06']],
   ['a gzip archive', ['\x1f\x8b']],
   ['a 7z archive', ['7z\xbc\xaf\x27\x1c']],
   ['a RAR archive', ['Rar!']],

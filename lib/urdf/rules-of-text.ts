@@ -50,7 +50,7 @@ export const TEXT_RULES = {
   'reading-given-up': {
     severity: 'error',
     title: 'Reading the file was given up',
-    meaning: 'Reading took longer, or needed more memory, than one file is allowed. No file that describes a robot comes near either bound.',
+    meaning: 'Reading took longer, or needed more memory, than one file is allowed, or too many files were waiting before it. No file that describes a robot comes near either bound.',
     effect: 'Nothing is known about the file, so nothing is imported. The service went on answering others meanwhile.',
     remedy: 'Send the file once more in case the machine was overloaded. If it is refused again, look at what makes it so large: hundreds of thousands of elements are the slip of a generating script.',
     before: '<robot name="arm">\n  <link name="base"/>\n  <joint/><joint/><joint/> … without end',

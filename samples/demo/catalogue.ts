@@ -1,3 +1,4 @@
+import type { Provenance } from '@/lib/contract/provenance'
 import type { ReferencePosesQuestion } from '@/lib/contract/reference-poses'
 
 /** One change of status of a demo revision. */
@@ -21,7 +22,7 @@ export interface DemoModel {
   /** Who imports its files. */
   readonly importer: string
   /** Sample files in the order of their revisions, each with what became of it. */
-  readonly revisions: readonly { readonly file: string; readonly note?: string; readonly evidence?: DemoEvidence; readonly history: readonly DemoTransition[] }[]
+  readonly revisions: readonly { readonly file: string; readonly note?: string; readonly provenance?: Provenance; readonly evidence?: DemoEvidence; readonly history: readonly DemoTransition[] }[]
 }
 
 const INES = 'ines@tarnholm.example'
@@ -48,18 +49,20 @@ export const CATALOGUE: readonly DemoModel[] = [
     team: 'tarnholm',
     slug: 'skerry-7',
     name: 'Skerry 7',
-    note: 'Seven-axis arm of cell 4, serial number SK7-0042.',
+    note: 'Seven-axis arm of cell 4.',
     importer: INES,
     revisions: [
       {
         file: 'skerry-7.urdf',
         note: 'As delivered, nominal dimensions.',
+        provenance: { geometry: 'nominal', supplierNote: 'Drawing set 7, issue C.' },
         evidence: MEASURED,
         history: [submitted('Nominal file from the supplier.'), released('Dimensions agree with the drawing.')],
       },
       {
         file: 'skerry-7-revision-2.urdf',
         note: 'As calibrated on the floor; wrist limit narrowed for the hose dress.',
+        provenance: { geometry: 'calibrated', serialNumber: 'SK7-0042' },
         evidence: MEASURED,
         history: [
           submitted('Calibration of the arm in cell 4, and one limit.'),

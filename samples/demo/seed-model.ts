@@ -29,13 +29,13 @@ async function seedEvidence(db: Db, place: Place, { by, file, ...question }: Dem
  *  A history that has left the scenario's path is somebody's own doing and stays as it is. */
 export async function seedModel(db: Db, { team, slug, name, note, importer, revisions }: DemoModel): Promise<void> {
   const { id } = (await findTeamBySlug(db, team)) ?? fail('team-not-found')
-  for (const [index, { file, note: revisionNote, evidence, history }] of revisions.entries()) {
+  for (const [index, { file, note: revisionNote, provenance, evidence, history }] of revisions.entries()) {
     const number = index + 1
     const known = await findModel(db, id, slug)
     if (known === null) {
-      await ask(db, importer, { name: 'createModel', useCase: createModel }, { team }, { form: { name, slug, note }, file: sample(file) })
+      await ask(db, importer, { name: 'createModel', useCase: createModel }, { team }, { form: { name, slug, note, ...provenance }, file: sample(file) })
     } else if (known.model.latest < number) {
-      await ask(db, importer, { name: 'createRevision', useCase: createRevision }, { team, model: slug }, { form: { note: revisionNote }, file: sample(file) })
+      await ask(db, importer, { name: 'createRevision', useCase: createRevision }, { team, model: slug }, { form: { note: revisionNote, ...provenance }, file: sample(file) })
     }
     const place = { team, model: slug, revision: String(number) }
     if (evidence !== undefined) await seedEvidence(db, place, evidence)

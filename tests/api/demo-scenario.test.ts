@@ -1,5 +1,6 @@
 import { describe, expect, inject, it } from 'vitest'
-import { asKey, asPerson, PEOPLE, type Person } from './support/callers'
+import { asKey, asPerson, type Person } from './support/callers'
+import { PEOPLE } from './support/people'
 
 const { url, tarnholmKey, kestrelKey } = inject('served')
 

@@ -4,11 +4,15 @@ import { describe, expect, inject, it } from 'vitest'
 import { OPERATIONS } from '@/lib/contract/operations'
 import { PROBLEMS } from '@/lib/errors'
 import { RULES } from '@/lib/urdf/rules'
+import { robotText } from '../lib/archive/make-zip'
 import { ALL_OPERATIONS, exampleRequest, PLACES } from './example-request'
 import { importModel, release } from './import-model'
 import { makeKey } from './make-key'
 import { get, send } from './send'
 import { asPerson } from './support/callers'
+import { importArchive } from './upload-archive'
+
+const MESHED = [{ name: 'arm.urdf', data: robotText('meshes/base.stl') }, { name: 'meshes/base.stl', data: 'solid example' }]
 
 const page = (at: string) => fetch(`${inject('served').url}${at}`, { redirect: 'manual' })
 
@@ -24,7 +28,7 @@ describe('the served OpenAPI document', () => {
 
 describe.each(ALL_OPERATIONS)('the example of %s', (name, operation) => {
   it('works on things of its own and is answered as declared', async () => {
-    const { model } = await importModel(`Example of ${name}`, 'skerry-7.urdf')
+    const { model } = operation.path.includes('{path}') ? await importArchive(`Example of ${name}`, MESHED) : await importModel(`Example of ${name}`, 'skerry-7.urdf')
     const places = { ...PLACES, model: model.slug, key: (await makeKey(['gateway'])).id }
     const headers = { ...(await asPerson('mira')), ...(operation.edits ? { 'if-match': '*' } : {}) }
     if (operation.errors.includes('not-released')) await release(model.slug)
@@ -33,7 +37,7 @@ describe.each(ALL_OPERATIONS)('the example of %s', (name, operation) => {
     const { status, schema, mediaType } = operation.answer
     expect(response.status, response.text).toBe(status)
     if (status === 204) return expect(response.text).toBe('')
-    expect(response.headers['content-type']).toBe(mediaType ?? 'application/json')
+    expect([mediaType ?? 'application/json', ...(operation.answer.alsoMediaTypes ?? [])]).toContain(response.headers['content-type'])
     if (schema !== undefined) expect(schema.parse(response.body)).toEqual(response.body)
     if (status === 201) {
       const { pathname } = new URL(response.headers.location!, inject('served').url)
@@ -54,7 +58,7 @@ describe('the pages that answers point at', () => {
     expect([answer.status, await answer.text()]).toEqual([200, expect.stringContaining(rule)])
   })
 
-  it.each(['/docs/cautions', '/docs/conventions', '/docs/errors', '/docs/evidence'])('are there: %s', async (at) => expect((await page(at)).status).toBe(200))
+  it.each(['/docs/cautions', '/docs/conventions', '/docs/errors', '/docs/evidence', '/docs/archives'])('are there: %s', async (at) => expect((await page(at)).status).toBe(200))
 
   it.each(['/docs/problems/never-was', '/docs/findings/never-was', '/docs/problems/__proto__'])('are not there: %s', async (at) => expect((await page(at)).status).toBe(404))
 })

@@ -1,5 +1,5 @@
 import { inject } from 'vitest'
-import { PEOPLE } from './support/callers'
+import { PEOPLE } from './support/people'
 import { signIn, type SessionFields } from './support/sign-in'
 
 /** The session of a person who signed in and out again. */

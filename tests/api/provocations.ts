@@ -9,6 +9,7 @@ import { importModel, importReleased, postTransition } from './import-model'
 import { makeExpiredKey, makeKey, makeRevokedKey, mistype } from './make-key'
 import type { Fields, Headers, Sent } from './send'
 import { asKey, asPerson } from './support/callers'
+import { importLost } from './upload-archive'
 import { floatingCart, snake } from './urdf'
 
 type Provoke = (operation: Operation, name: OperationName) => Promise<Sent>
@@ -24,6 +25,7 @@ const revoked = once(() => makeRevokedKey(SCOPES))
 const expired = once(() => makeExpiredKey(SCOPES))
 const ended = once(() => endedSession('mira'))
 const aKey = once(async () => (await makeKey(['gateway'])).id)
+const lost = once(importLost)
 const longArm = once(async () => (await importModel('A very long arm', snake(100))).model.slug)
 const longestArm = once(async () => (await importModel('A longer arm still', snake(300, 0.02))).model.slug)
 /** So many joints that their check vectors would not fit into an answer. */
@@ -122,6 +124,8 @@ export const PROVOCATIONS: Partial<Record<ProblemCode, Provoke>> = {
   'budget-exceeded': async (operation, name) =>
     withFields({ targets: outOfReach(10_000), seeds: undefined, attempts: 64, include: ['converged'] }, { model: await longArm() })(operation, name),
   'link-not-determined': withFields({ chain: { tip: 'link_3' }, configurations: [[0, 0, 0]], links: ['link_1', 'tool_flange'] }),
+  'mesh-not-found': (operation) => asAdministrator(operation, {}, { path: 'never/was.stl' }),
+  'file-unavailable': async (operation) => asAdministrator(operation, {}, { model: await lost() }),
   'import-refused': (operation) => asAdministrator(operation),
   'slug-taken': (operation) =>
     asAdministrator(operation, { form: { fields: { name: 'Skerry', slug: 'skerry-7' }, file: { name: 'skerry-7.urdf', bytes: sample('skerry-7.urdf') } } }),

@@ -152,14 +152,16 @@ describe('the register', () => {
     expect(seen).toEqual(all)
   })
 
-  it('filters by words in name, slug or note, by status and by joints, and keeps the filter in the link', async () => {
+  it('filters by words in name, slug, note or the robot’s name, whatever the case and accents, by status and by joints, and keeps the filter in the link', async () => {
     expect(await slugs({ query: 'RAIL' })).toEqual(['skerry-7-rail'])
     expect(await slugs({ query: 'palletiser' })).toEqual(['fulmar-6'])
     expect(await slugs({ joints: '8', query: 'skerry' })).toEqual(['skerry-7-rail'])
     expect(await slugs({ joints: '4', query: 'scara' })).toEqual(['gannet-4'])
     expect(await slugs({ status: 'superseded', query: 'skerry' })).toEqual(['skerry-7'])
     expect(await slugs({ query: '100%' })).toEqual([])
-    expect(await slugs({ query: 'skerry_7' })).toEqual([])
+    expect(await slugs({ query: 'SKÉRRY_7', joints: '8' })).toEqual(['skerry-7-rail'])
+    expect(await slugs({ query: 'SKÉRRY_7', status: 'superseded' })).toEqual(['skerry-7'])
+    expect(await slugs({ query: 'fulmar%6' })).toEqual([])
     expect(await slugs({ query: '\\' })).toEqual([])
     expect((await slugs({ query: '   ' })).length).toBeGreaterThan(5)
     const { headers } = await list({ query: 'skerry 7', limit: '1' })

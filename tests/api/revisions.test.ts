@@ -31,6 +31,20 @@ describe('a further revision', () => {
     expect((await get(`/teams/tarnholm/models/${model.slug}`, await asPerson('kofi'))).body).toMatchObject({ revisions: 2, latest: { revision: 2, independent: 4 } })
   })
 
+  it('keeps where its file comes from, which enters no number', async () => {
+    const { model, revision } = await importModel('From somewhere', 'trainer-3r.urdf')
+    expect(revision).not.toHaveProperty('provenance')
+    const said = { serialNumber: 'TR3-0017', geometry: 'calibrated', supplierNote: 'Drawing set 2, issue B.\nValid from May.' }
+    const made = await postRevision(model.slug, 'trainer-3r.urdf', { ...said, allowSame: 'true' })
+    expect(made.body).toMatchObject({ revision: 2, fingerprint: revision.fingerprint, provenance: said })
+    expect((await get(at(model.slug, 2), await asPerson('kofi'))).body).toMatchObject({ provenance: said })
+    const silent = await postRevision(model.slug, 'trainer-3r.urdf', { serialNumber: '', supplierNote: ' ', allowSame: 'true' })
+    expect(silent.body).not.toHaveProperty('provenance')
+    const wrong = await postRevision(model.slug, 'trainer-3r.urdf', { geometry: 'about right', serialNumber: 'x'.repeat(101), allowSame: 'true' })
+    expectProblem(wrong, 'invalid-request')
+    expect(pointersOf(wrong)).toEqual(['/form/serialNumber', '/form/geometry'])
+  })
+
   it('names the twin of a file that computes the same numbers, unless it is wanted all the same', async () => {
     const { model } = await importModel('Stored twice', 'trainer-3r.urdf')
     const commented = sample('trainer-3r.urdf').toString().replace('<robot', '<!-- the same arm -->\n<robot')

@@ -20,7 +20,7 @@ let callers: { readonly who: string; readonly headers: Headers }[]
 
 beforeAll(async () => {
   const { model } = await importModel('Only at Kestrel', 'trainer-3r.urdf', 'runa', 'kestrel')
-  kestrels = { team: 'kestrel', model: model.slug, revision: '1', set: '1', key: (await makeKey(SCOPES, {}, 'runa')).id }
+  kestrels = { team: 'kestrel', model: model.slug, revision: '1', set: '1', path: 'meshes/base.stl', key: (await makeKey(SCOPES, {}, 'runa')).id }
   callers = [
     { who: 'an administrator of another team', headers: await asPerson('mira') },
     { who: 'a key of another team with every scope', headers: asKey((await makeKey(SCOPES)).key) },
@@ -31,7 +31,7 @@ describe.each(ALL_OPERATIONS)('%s', (_name, operation) => {
   it("answers another team's things word for word like a team that never was", async () => {
     for (const { who, headers } of callers) {
       const theirs = await answerTo(exampleRequest(operation, headers, kestrels))
-      const nobodys = await answerTo(exampleRequest(operation, headers, { team: 'never-was', model: 'never-was', revision: '1', set: '1', key: 'neverWas0000' }))
+      const nobodys = await answerTo(exampleRequest(operation, headers, { team: 'never-was', model: 'never-was', revision: '1', set: '1', path: 'meshes/base.stl', key: 'neverWas0000' }))
       expect(theirs.status, who).toBe(404)
       expect(theirs, who).toEqual(nobodys)
     }

@@ -47,7 +47,8 @@ describe('the migrations on a PostgreSQL server', () => {
     const { PGlite } = await import('@electric-sql/pglite')
     const columns = `select table_name, column_name, data_type, is_nullable from information_schema.columns
                      where table_schema = 'public' order by table_name, ordinal_position`
-    const embedded = await PGlite.create()
+    const { pg_trgm } = await import('@electric-sql/pglite/contrib/pg_trgm')
+    const embedded = await PGlite.create({ extensions: { pg_trgm } })
     for (const statement of readMigrations()) await embedded.exec(statement)
     const { rows } = await embedded.query(columns)
     await embedded.close()

@@ -1,5 +1,5 @@
 import { spawn, spawnSync } from 'node:child_process'
-import { existsSync, readFileSync, rmSync } from 'node:fs'
+import { existsSync, mkdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs'
 import path from 'node:path'
 import { setTimeout as pause } from 'node:timers/promises'
 import { afterAll, beforeAll, describe, expect, it } from 'vitest'
@@ -47,6 +47,7 @@ const PROOFS: readonly (readonly [RegExp, string])[] = [
   [/^curl -s /, 'executed below'],
   [/^(ELBOWROOM_DATA_DIR=\S+ )?npm run (dump|restore) -- /, 'executed below'],
   [/^pg_(dump|restore) /, 'executed below'],
+  [/^tar -[cx]f /, 'executed below'],
 ]
 
 describe('the README', () => {
@@ -126,6 +127,17 @@ describe('the README', () => {
     expect(lines).toHaveLength(2)
     for (const line of lines) expect(sh(line, environmentFor(stopped))).toMatchObject({ status: 0 })
     expect(existsSync(path.join(folder, 'restored/database/PG_VERSION'))).toBe(true)
+  })
+
+  it('copies the files of archives and meshes beside the restored database', () => {
+    const digest = '0'.repeat(64)
+    mkdirSync(path.join(dataDir, 'files/00'), { recursive: true })
+    writeFileSync(path.join(dataDir, 'files/00', digest), 'kept')
+    mkdirSync(path.join(folder, 'restored'), { recursive: true })
+    const lines = commandsLike(/^tar /).map((line) => line.replace(/\b(elbowroom-files\.tar|restored)\b/g, `${folder}/$1`))
+    expect(lines).toHaveLength(2)
+    for (const line of lines) expect(sh(line)).toMatchObject({ status: 0 })
+    expect(readFileSync(path.join(folder, 'restored/files/00', digest), 'utf8')).toBe('kept')
   })
 
   it('dumps and restores a PostgreSQL database', async () => {

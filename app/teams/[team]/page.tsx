@@ -41,7 +41,7 @@ export default async function DeskPage({ params }: { readonly params: Promise<{ 
       ) : (
         <div className="grid items-start gap-x-8 gap-y-8 desk:grid-cols-2">
           <div className="grid gap-8">
-            <DeskReviews team={team} reviews={desk.reviews} mayRelease={includesRole(caller.role, 'approver')} fourEyes={caller.team.fourEyes} />
+            <DeskReviews team={team} queue={desk.queue} now={requestTime()} mayRelease={includesRole(caller.role, 'approver')} fourEyes={caller.team.fourEyes} />
             {mayImport ? <DeskDrafts team={team} drafts={desk.drafts} /> : null}
             {may(caller, 'listKeys') ? <DeskKeys team={team} keys={desk.keys} now={requestTime()} /> : null}
           </div>

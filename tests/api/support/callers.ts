@@ -1,15 +1,7 @@
 import { inject } from 'vitest'
+import { PEOPLE } from './people'
 import { signIn, type SessionFields } from './sign-in'
 
-/** The people of the demo scenario by first name. */
-export const PEOPLE = {
-  mira: 'mira@tarnholm.example',
-  tomas: 'tomas@tarnholm.example',
-  ines: 'ines@tarnholm.example',
-  kofi: 'kofi@tarnholm.example',
-  runa: 'runa@kestrel.example',
-  edda: 'edda@kestrel.example',
-} as const
 export type Person = keyof typeof PEOPLE
 
 const sessions = new Map<Person, Promise<SessionFields>>()

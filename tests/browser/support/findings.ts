@@ -46,3 +46,17 @@ export const smallText = (page: Page): Promise<string[]> =>
     }
     return [...small]
   })
+
+/** Visible text that its box cuts off without a way to scroll to the rest. What is meant as an excerpt says so (data-excerpt). */
+export const cutText = (page: Page): Promise<string[]> =>
+  page.evaluate(() => {
+    const cut: string[] = []
+    for (const element of document.body.querySelectorAll<HTMLElement>('*')) {
+      if (element.clientWidth <= 1 || element.closest('[data-excerpt], .sr-only, script, style, svg') !== null) continue
+      const { overflowX, overflowY } = getComputedStyle(element)
+      const hides = (overflow: string) => overflow === 'hidden' || overflow === 'clip'
+      const isCut = (hides(overflowX) && element.scrollWidth > element.clientWidth + 1) || (hides(overflowY) && element.scrollHeight > element.clientHeight + 1)
+      if (isCut && element.checkVisibility() && element.innerText.trim() !== '') cut.push(`${element.tagName.toLowerCase()}.${element.className}: ${element.innerText.slice(0, 60)}`)
+    }
+    return cut
+  })

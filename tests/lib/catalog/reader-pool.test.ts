@@ -9,6 +9,7 @@ import { log } from '@/lib/log'
 vi.mock('@/lib/log', () => ({ log: { error: vi.fn() } }))
 
 const bytes = new Uint8Array(readFileSync('samples/trainer-3r.urdf'))
+const upload = { name: 'trainer-3r.urdf', bytes }
 afterEach(() => vi.unstubAllEnvs())
 afterAll(() => endReaders())
 
@@ -17,13 +18,13 @@ const asService = () => vi.stubEnv('NEXT_RUNTIME', 'nodejs')
 
 describe('reading a file', () => {
   it('is done in the own thread of a command', async () => {
-    expect(await readFile(bytes)).toEqual(answerReader({ bytes, as: 'parts' }))
-    expect(await readCheck(bytes)).toBe(answerReader({ bytes, as: 'json' }))
+    expect(await readFile(upload)).toEqual(await answerReader({ ...upload, as: 'parts' }))
+    expect(await readCheck(upload)).toBe(await answerReader({ ...upload, as: 'json' }))
   })
 
   it('ends in a finding and a line in the log, and in no failure of ours, when the reader fails', async () => {
     asService()
-    const { read, findings, sourceDigest } = await readFile(bytes)
+    const { read, findings, sourceDigest } = await readFile(upload)
     expect([read, sourceDigest]).toEqual([null, createHash('sha256').update(bytes).digest('hex')])
     expect(findings).toEqual([
       {
@@ -36,13 +37,13 @@ describe('reading a file', () => {
       },
     ])
     expect(vi.mocked(log.error).mock.calls).toEqual([[{ reason: 'failure', bytes: bytes.length, error: expect.stringContaining('.ts') }, expect.any(String)]])
-    expect(CheckedImport.parse(JSON.parse(await readCheck(bytes)))).toEqual({ findings })
+    expect(CheckedImport.parse(JSON.parse(await readCheck(upload)))).toEqual({ findings })
   })
 
   it('is refused when the service is being stopped', async () => {
     asService()
-    await readFile(bytes)
+    await readFile(upload)
     await endReaders()
-    expect((await readFile(bytes)).findings[0]!.message).toContain('the service is being stopped')
+    expect((await readFile(upload)).findings[0]!.message).toContain('the service is being stopped')
   })
 })

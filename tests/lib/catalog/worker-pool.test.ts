@@ -24,7 +24,7 @@ function poolOf(options: Partial<PoolOptions> = {}): WorkerPool<string, unknown>
     spawned++
     return new Worker(CODE, { eval: true, resourceLimits: SMALL })
   }
-  const pool = createWorkerPool<string, unknown>({ spawn, size: 1, limitMs: 15_000, idleMs: 60_000, ...options })
+  const pool = createWorkerPool<string, unknown>({ spawn, size: 1, queue: 100, limitMs: 15_000, idleMs: 60_000, ...options })
   pools.push(pool)
   return pool
 }
@@ -47,6 +47,12 @@ describe('a pool of workers', () => {
     const order: string[] = []
     await Promise.all(questions.map((question) => pool.ask(question).finally(() => order.push(question))))
     expect(order).toEqual(questions)
+  })
+
+  it('gives up at once what would wait behind more than may wait', async () => {
+    const pool = poolOf({ queue: 2 })
+    const outcomes = await Promise.all(['one', 'two', 'three', 'four', 'five'].map((question) => pool.ask(question)))
+    expect(outcomes).toEqual([{ answer: 'one' }, { answer: 'two' }, { answer: 'three' }, { givenUp: 'crowded' }, { givenUp: 'crowded' }])
   })
 
   it('gives up a question that takes too long, and answers the next by a new worker', async () => {

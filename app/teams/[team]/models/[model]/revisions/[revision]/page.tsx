@@ -9,6 +9,7 @@ import { FindingsSummary } from '@/components/sheet/findings-summary'
 import { HistoryList } from '@/components/sheet/history-list'
 import { InForceNotice } from '@/components/sheet/in-force-notice'
 import { rowsOfChain } from '@/components/sheet/joint-rows'
+import { MeshesPanel } from '@/components/sheet/meshes-panel'
 import { NoDrawing } from '@/components/sheet/no-drawing'
 import { PrintStyle } from '@/components/sheet/print-style'
 import { RequestPanel } from '@/components/sheet/request-panel'
@@ -18,11 +19,13 @@ import { SheetHead } from '@/components/sheet/sheet-head'
 import { SheetTitleBlock } from '@/components/sheet/sheet-title-block'
 import { SourcePanel } from '@/components/sheet/source-panel'
 import { StructurePanel } from '@/components/sheet/structure-panel'
+import { UsedByPanel } from '@/components/sheet/used-by-panel'
 import { may } from '@/lib/access/permissions'
 import { getFindings } from '@/lib/catalog/get-findings'
 import { getModel } from '@/lib/catalog/get-model'
 import { getRevision } from '@/lib/catalog/get-revision'
 import { listRevisions } from '@/lib/catalog/list-revisions'
+import { listUses } from '@/lib/catalog/list-uses'
 import { listReferencePoses } from '@/lib/compute/list-reference-poses'
 import type { ReferencePosesSummary } from '@/lib/contract/reference-poses'
 import { siteUrl } from '@/lib/env'
@@ -43,18 +46,20 @@ export async function generateMetadata({ params }: SheetPageProps): Promise<Meta
 
 const MOST_REVISIONS = 200
 const MOST_SETS = 5
+const MOST_USES = 8
 
 const one = (value: string | string[] | undefined): string | undefined => (typeof value === 'string' && value !== '' ? value : undefined)
 
 export default async function SheetPage({ params, searchParams }: SheetPageProps) {
   const { caller, at } = await visit('getRevision', await params)
   const asked = await searchParams
-  const [{ body: revision }, { body: model }, { body: revisions }, { body: findings }, { body: poses }, drawn] = await Promise.all([
+  const [{ body: revision }, { body: model }, { body: revisions }, { body: findings }, { body: poses }, { body: uses }, drawn] = await Promise.all([
     getRevision(caller, reading(at)),
     getModel(caller, reading(at)),
     listRevisions(caller, reading(at, { limit: MOST_REVISIONS })),
     getFindings(caller, reading(at)),
     listReferencePoses(caller, reading(at, { limit: MOST_SETS })),
+    listUses(caller, reading(at, { limit: MOST_USES })),
     drawnChain(caller, at, { base: one(asked.base), tip: one(asked.tip) }),
   ])
   const { slug: team } = caller.team
@@ -117,7 +122,9 @@ export default async function SheetPage({ params, searchParams }: SheetPageProps
             fingerprint={revision.fingerprint}
           />
         )}
-        <SourcePanel path={path} fileName={revision.fileName} sourceDigest={revision.sourceDigest} fingerprint={revision.fingerprint} />
+        <UsedByPanel uses={uses.items} hasMore={uses.nextCursor !== undefined} />
+        <SourcePanel path={path} fileName={revision.fileName} entry={revision.archive?.entry} sourceDigest={revision.sourceDigest} fingerprint={revision.fingerprint} />
+        {revision.meshes === undefined ? null : <MeshesPanel path={path} meshes={revision.meshes} />}
       </div>
       <StructurePanel rootLink={revision.rootLink} joints={revision.joints} counts={revision.counts} robotName={revision.robotName} />
     </Main>

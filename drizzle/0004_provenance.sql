@@ -1,0 +1,3 @@
+ALTER TABLE "revisions" ADD COLUMN "serial_number" text;--> statement-breakpoint
+ALTER TABLE "revisions" ADD COLUMN "geometry" text;--> statement-breakpoint
+ALTER TABLE "revisions" ADD COLUMN "supplier_note" text;
