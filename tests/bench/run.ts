@@ -1,4 +1,6 @@
+import { spawnSync } from 'node:child_process'
 import { writeFileSync } from 'node:fs'
+import { availableParallelism } from 'node:os'
 import { benchArm, benchConfigurations } from './arms'
 import { startKdl } from './kdl-child'
 import { ours, type Ask } from './ours'
@@ -69,6 +71,10 @@ interface Row {
 const rows: Row[] = []
 const lines: string[][] = [['asked', 'joints', 'ours', 'ours/joint', 'KDL', 'mathjs', 'ml-matrix', 'ours/KDL', 'target']]
 const ns = (value: number | undefined) => (value === undefined ? '–' : value < 1e4 ? `${value.toFixed(0)} ns` : `${(value / 1000).toFixed(1)} µs`)
+
+// On one core, this process with all its threads and what it starts from here on: on two, whatever else runs on one of them, or on the
+// other half of its hardware, would count against one side alone. Where that cannot be asked for, they run where they run.
+spawnSync('taskset', ['--all-tasks', '--cpu-list', '--pid', String(availableParallelism() - 1), String(process.pid)], { stdio: 'ignore' })
 
 const kdl = startKdl()
 const hasKdl = !('missing' in kdl)
