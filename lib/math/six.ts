@@ -1,3 +1,5 @@
+import { fillTwist } from './twist-columns'
+
 /** J·Jᵀ + λ²·I = L·D·Lᵀ of a row-major 6 x n matrix J, written out: a task of six components is what nearly everyone asks, and a loop over
  *  six costs twice the time. All of it goes through the square of J, whose rounding grows with the square of J's condition; where that
  *  is felt a solution is corrected by its residual, which is taken through J itself (corrected semi-normal equations, Björck 1987, from
@@ -169,22 +171,7 @@ export function solveSix(j: Float64Array, n: number, factors: SixFactors, b: Flo
 export function projectSix(j: Float64Array, n: number, factors: SixFactors, vector: Float64Array, corrections: number): void {
   const { rest } = factors
   for (let pass = 0; pass <= corrections; pass++) {
-    let r1 = 0, r2 = 0, r3 = 0, r4 = 0, r5 = 0, r6 = 0
-    for (let c = 0; c < n; c++) {
-      const part = vector[c]!
-      r1 += j[c]! * part
-      r2 += j[n + c]! * part
-      r3 += j[2 * n + c]! * part
-      r4 += j[3 * n + c]! * part
-      r5 += j[4 * n + c]! * part
-      r6 += j[5 * n + c]! * part
-    }
-    rest[0] = r1
-    rest[1] = r2
-    rest[2] = r3
-    rest[3] = r4
-    rest[4] = r5
-    rest[5] = r6
+    fillTwist(j, vector, rest)
     backSix(factors, 0)
     const y1 = rest[0]!, y2 = rest[1]!, y3 = rest[2]!, y4 = rest[3]!, y5 = rest[4]!, y6 = rest[5]!
     for (let c = 0; c < n; c++) {
@@ -197,27 +184,12 @@ export function projectSix(j: Float64Array, n: number, factors: SixFactors, vect
 /** Both of that without corrections, at once: rates = Jᵀ·(J·Jᵀ)⁻¹·b, and `vector` projected. */
 export function solveAndProjectSix(j: Float64Array, n: number, factors: SixFactors, b: Float64Array, rates: Float64Array, vector: Float64Array): void {
   const { rest } = factors
-  let r1 = 0, r2 = 0, r3 = 0, r4 = 0, r5 = 0, r6 = 0
-  for (let c = 0; c < n; c++) {
-    const part = vector[c]!
-    r1 += j[c]! * part
-    r2 += j[n + c]! * part
-    r3 += j[2 * n + c]! * part
-    r4 += j[3 * n + c]! * part
-    r5 += j[4 * n + c]! * part
-    r6 += j[5 * n + c]! * part
-  }
-  for (let i = 0; i < 6; i++) rest[i] = b[i]!
-  rest[6] = r1
-  rest[7] = r2
-  rest[8] = r3
-  rest[9] = r4
-  rest[10] = r5
-  rest[11] = r6
+  fillTwist(j, vector, rest)
+  for (let i = 0; i < 6; i++) rest[6 + i] = b[i]!
   backSix(factors, 0)
   backSix(factors, 6)
-  const y1 = rest[0]!, y2 = rest[1]!, y3 = rest[2]!, y4 = rest[3]!, y5 = rest[4]!, y6 = rest[5]!
-  const z1 = rest[6]!, z2 = rest[7]!, z3 = rest[8]!, z4 = rest[9]!, z5 = rest[10]!, z6 = rest[11]!
+  const z1 = rest[0]!, z2 = rest[1]!, z3 = rest[2]!, z4 = rest[3]!, z5 = rest[4]!, z6 = rest[5]!
+  const y1 = rest[6]!, y2 = rest[7]!, y3 = rest[8]!, y4 = rest[9]!, y5 = rest[10]!, y6 = rest[11]!
   for (let c = 0; c < n; c++) {
     const j1 = j[c]!, j2 = j[n + c]!, j3 = j[2 * n + c]!, j4 = j[3 * n + c]!, j5 = j[4 * n + c]!, j6 = j[5 * n + c]!
     rates[c] = j1 * y1 + j2 * y2 + j3 * y3 + j4 * y4 + j5 * y5 + j6 * y6
