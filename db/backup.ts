@@ -1,8 +1,9 @@
 import { existsSync, readdirSync, renameSync, rmSync, statSync } from 'node:fs'
-import { open, readFile, rename, rm } from 'node:fs/promises'
+import { readFile } from 'node:fs/promises'
 import { promisify } from 'node:util'
 import { gunzip } from 'node:zlib'
 import { databaseUrl } from '@/lib/env'
+import { writeWhole } from '@/lib/write-whole'
 import { embeddedFolder, openEmbedded } from './client'
 
 /** A reason that the operator can act on, told as it is. */
@@ -30,24 +31,6 @@ export async function dumpTo(file: string): Promise<number> {
     return archive.size
   } finally {
     await close()
-  }
-}
-
-/** Written beside and renamed when it is on the disk, so that a file of that name is always a whole dump. */
-async function writeWhole(file: string, bytes: Uint8Array): Promise<void> {
-  const beside = `${file}.${process.pid}.part`
-  try {
-    const handle = await open(beside, 'wx', 0o600)
-    try {
-      await handle.writeFile(bytes)
-      await handle.sync()
-    } finally {
-      await handle.close()
-    }
-    await rename(beside, file)
-  } catch (error) {
-    await rm(beside, { force: true })
-    throw error
   }
 }
 

@@ -83,19 +83,23 @@ function makeOrthonormal(rows: Float64Array, left: Uint8Array, n: number, r: num
   }
 }
 
-/** Fills `sizes` with the squared column norms that remain, and gives the first that is large enough. */
+/** Fills `sizes` with the squared column norms that remain, 0 where a column was taken, and gives the pivot. */
 function firstLargeColumn(rows: Float64Array, sizes: Float64Array, left: Uint8Array, n: number, r: number): number {
-  let largest = 0
   for (let i = 0; i < n; i++) {
-    if (left[i] === 0) continue
-    let size = 1
-    for (let k = 0; k < r; k++) size -= rows[i * r + k]! * rows[i * r + k]!
+    let size = left[i]!
+    if (size === 1) for (let k = 0; k < r; k++) size -= rows[i * r + k]! * rows[i * r + k]!
     sizes[i] = size
-    if (size > largest) largest = size
   }
+  return firstLarge(sizes, n)
+}
+
+/** The first of n sizes, squared, that is large enough beside the largest. */
+function firstLarge(sizes: Float64Array, n: number): number {
+  let largest = 0
+  for (let i = 0; i < n; i++) if (sizes[i]! > largest) largest = sizes[i]!
   const threshold = PIVOT_PART * PIVOT_PART * largest
   let pivot = 0
-  while (left[pivot] === 0 || sizes[pivot]! < threshold) pivot++
+  while (sizes[pivot]! < threshold) pivot++
   return pivot
 }
 
@@ -105,7 +109,12 @@ export function makeCanonical(nullRows: Float64Array, n: number, k: number, room
   const { sizes, q } = room
   for (let at = 0; at < k * n; at++) out[at] = nullRows[at]!
   for (let found = 0; found < k; found++) {
-    const pivot = firstLarge(out, sizes, n, found, k)
+    for (let i = 0; i < n; i++) {
+      let size = 0
+      for (let at = found * n + i; at < k * n; at += n) size += out[at]! * out[at]!
+      sizes[i] = size
+    }
+    const pivot = firstLarge(sizes, n)
     const first = found * n
     let squares = 0
     for (let row = found; row < k; row++) {
@@ -127,17 +136,4 @@ export function makeCanonical(nullRows: Float64Array, n: number, k: number, room
     }
     if (out[first + pivot]! < 0) for (let i = 0; i < n; i++) out[first + i] = 0 - out[first + i]!
   }
-}
-
-function firstLarge(rows: Float64Array, sizes: Float64Array, n: number, from: number, to: number): number {
-  let largest = 0
-  for (let i = 0; i < n; i++) {
-    let size = 0
-    for (let at = from * n + i; at < to * n; at += n) size += rows[at]! * rows[at]!
-    sizes[i] = size
-    if (size > largest) largest = size
-  }
-  let pivot = 0
-  while (sizes[pivot]! < PIVOT_PART * PIVOT_PART * largest) pivot++
-  return pivot
 }

@@ -1,6 +1,6 @@
-import { randomBytes } from 'node:crypto'
-import { mkdir, open, readFile, rename, rm, stat } from 'node:fs/promises'
+import { mkdir, readFile, stat } from 'node:fs/promises'
 import path from 'node:path'
+import { writeWhole } from '@/lib/write-whole'
 import { placeOf, type Storage } from './storage'
 
 const isMissing = (error: unknown): boolean => (error as NodeJS.ErrnoException).code === 'ENOENT'
@@ -26,21 +26,7 @@ export function folderStorage(folder: string): Storage {
       if (await has(digest)) return
       const file = fileOf(digest)
       await mkdir(path.dirname(file), { recursive: true, mode: 0o700 })
-      // Written beside and renamed when it is on the disk, so that a file of that name is always whole.
-      const beside = `${file}.${randomBytes(6).toString('hex')}.part`
-      try {
-        const handle = await open(beside, 'wx', 0o600)
-        try {
-          await handle.writeFile(bytes)
-          await handle.sync()
-        } finally {
-          await handle.close()
-        }
-        await rename(beside, file)
-      } catch (error) {
-        await rm(beside, { force: true })
-        throw error
-      }
+      await writeWhole(file, bytes)
     },
   }
 }
