@@ -1,5 +1,6 @@
 import type { DescribedJoint, JointType, Origin, Triple } from '@/lib/urdf/description'
 import { checkAttributes } from '@/lib/urdf/check-attributes'
+import { checkNumbers } from '@/lib/urdf/check-numbers'
 import { mentionMacros } from '@/lib/urdf/mention-macros'
 import { readAxis } from '@/lib/urdf/read-axis'
 import { readLimit, type Limits } from '@/lib/urdf/read-limit'
@@ -40,6 +41,7 @@ export function readJoint(reading: Reading, element: XmlElement): DraftJoint {
   const parts = uniqueParts(reading, element, label)
   checkAttributes(report, element.name, attributes, label)
   const type = readType(reading, attributes, element, label)
+  if (type === null) checkNumbers(reading, parts, label)
   return {
     at: element.at,
     label,

@@ -269,4 +269,11 @@ describe('parseUrdf', () => {
       element: "joint 'turn'",
     })
   })
+
+  it('reports the malformed numbers of a joint whose type is unknown too, so that no second reading is needed', () => {
+    const joint = '<joint name="j" type="revolut"><parent link="a"/><child link="b"/><axis xyz="0 0,5 1"/><limit lower="a" upper="1" effort="1" velocity="0x1"/><mimic joint="k" offset="1,5"/></joint>'
+    const { findings } = parse(robot(`<link name="a"/><link name="b"/>${joint}`))
+    expect(findings.map(({ rule }) => rule)).toEqual(['joint-type-unknown', 'number-malformed', 'number-malformed', 'number-malformed', 'number-malformed'])
+    expect(findings.map(({ message }) => message.split('=')[0])).toEqual(['type', 'xyz', 'lower', 'velocity', 'offset'])
+  })
 })
